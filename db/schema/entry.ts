@@ -1,0 +1,103 @@
+import { index, integer, primaryKey, sqliteTable, text, uniqueIndex } from 'drizzle-orm/sqlite-core'
+import { club } from './club'
+import { event, runGroup } from './event'
+
+/** A person at an event: driver, passenger, instructor or crew. */
+export const person = sqliteTable(
+  'person',
+  {
+    id: text('id').primaryKey(),
+    clubId: text('club_id').notNull().references(() => club.id),
+    eventId: text('event_id').notNull().references(() => event.id),
+    accountId: text('account_id'),
+    name: text('name').notNull(),
+    email: text('email'),
+    mobile: text('mobile'),
+  },
+  (table) => [index('person_event').on(table.eventId)],
+)
+
+/** A car of the club's history, whatever events it comes to. */
+export const car = sqliteTable(
+  'car',
+  {
+    id: text('id').primaryKey(),
+    clubId: text('club_id').notNull().references(() => club.id),
+    model: text('model').notNull(),
+    colour: text('colour').notNull(),
+    /** Upper case, no spaces. */
+    plate: text('plate').notNull(),
+  },
+  (table) => [index('car_plate').on(table.clubId, table.plate)],
+)
+
+/** One car at one event. Its id is for ever; number, plate and group may change. */
+export const entry = sqliteTable(
+  'entry',
+  {
+    id: text('id').primaryKey(),
+    clubId: text('club_id').notNull().references(() => club.id),
+    eventId: text('event_id').notNull().references(() => event.id),
+    carId: text('car_id').notNull().references(() => car.id),
+    /** Its number in pass tokens, 1 to 65535, given per event, never reused. */
+    code: integer('code').notNull(),
+    /** As on the door: `007` is not `7`. */
+    number: text('number').notNull(),
+    /** As printed on the car, upper case with its spaces. */
+    plate: text('plate').notNull(),
+    groupId: text('group_id').notNull().references(() => runGroup.id),
+    facts: text('facts', { mode: 'json' }).$type<Readonly<Record<string, string | number | boolean | null>>>().notNull(),
+    note: text('note').notNull(),
+    passengerSeats: integer('passenger_seats').notNull(),
+    withdrawn: integer('withdrawn', { mode: 'boolean' }).notNull(),
+  },
+  (table) => [
+    uniqueIndex('entry_code').on(table.eventId, table.code),
+    uniqueIndex('entry_number').on(table.eventId, table.number),
+    index('entry_event').on(table.eventId),
+  ],
+)
+
+/** Who sits in an entry. */
+export const entryPerson = sqliteTable(
+  'entry_person',
+  {
+    clubId: text('club_id').notNull().references(() => club.id),
+    entryId: text('entry_id').notNull().references(() => entry.id),
+    personId: text('person_id').notNull().references(() => person.id),
+    role: text('role', { enum: ['driver', 'passenger', 'instructor'] }).notNull(),
+  },
+  (table) => [primaryKey({ columns: [table.entryId, table.personId, table.role] })],
+)
+
+/** What an entrant declared, one immutable row a version. */
+export const declaration = sqliteTable(
+  'declaration',
+  {
+    id: text('id').primaryKey(),
+    clubId: text('club_id').notNull().references(() => club.id),
+    entryId: text('entry_id').notNull().references(() => entry.id),
+    version: integer('version').notNull(),
+    body: text('body', { mode: 'json' }).$type<Readonly<Record<string, unknown>>>().notNull(),
+    signedAt: integer('signed_at'),
+  },
+  (table) => [uniqueIndex('declaration_version').on(table.entryId, table.version)],
+)
+
+/** A list that was imported: its text's hash and what came of it. */
+export const entryImport = sqliteTable(
+  'entry_import',
+  {
+    id: text('id').primaryKey(),
+    clubId: text('club_id').notNull().references(() => club.id),
+    eventId: text('event_id').notNull().references(() => event.id),
+    textHash: text('text_hash').notNull(),
+    fileName: text('file_name').notNull(),
+    added: integer('added').notNull(),
+    changed: integer('changed').notNull(),
+    unchanged: integer('unchanged').notNull(),
+    byAccountId: text('by_account_id').notNull(),
+    at: integer('at').notNull(),
+  },
+  (table) => [index('entry_import_event').on(table.eventId)],
+)

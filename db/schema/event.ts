@@ -1,0 +1,48 @@
+import { index, integer, sqliteTable, text, uniqueIndex } from 'drizzle-orm/sqlite-core'
+import { club } from './club'
+
+export const event = sqliteTable(
+  'event',
+  {
+    id: text('id').primaryKey(),
+    clubId: text('club_id').notNull().references(() => club.id),
+    /** The event's number in pass tokens, 1 to 65535, never reused. */
+    code: integer('code').notNull(),
+    name: text('name').notNull(),
+    venue: text('venue').notNull(),
+    /** IANA name. */
+    timeZone: text('time_zone').notNull(),
+    firstDay: text('first_day').notNull(),
+    lastDay: text('last_day').notNull(),
+    checklistHash: text('checklist_hash').notNull().references(() => checklistText.hash),
+    limitsHash: text('limits_hash').notNull().references(() => limitsText.hash),
+    defaultDepth: text('default_depth', { enum: ['look-over', 'standard', 'full'] }).notNull(),
+    /** Every car is seen, or the must-see ones plus a sample. */
+    depthPolicy: text('depth_policy', { enum: ['all', 'must-see'] }).notNull(),
+    listStaleMinutes: integer('list_stale_minutes').notNull(),
+    /** Counters that are never wound back: next device kid and next entry code. */
+    nextKid: integer('next_kid').notNull(),
+    nextEntryCode: integer('next_entry_code').notNull(),
+    /** Moved on by every change of the snapshot that devices load. */
+    snapshotVersion: integer('snapshot_version').notNull(),
+    createdAt: integer('created_at').notNull(),
+  },
+  (table) => [uniqueIndex('event_code').on(table.clubId, table.code)],
+)
+
+export const runGroup = sqliteTable(
+  'run_group',
+  {
+    id: text('id').primaryKey(),
+    clubId: text('club_id').notNull().references(() => club.id),
+    eventId: text('event_id').notNull().references(() => event.id),
+    name: text('name').notNull(),
+    order: integer('order').notNull(),
+    firstSessionAt: integer('first_session_at'),
+  },
+  (table) => [uniqueIndex('run_group_name').on(table.eventId, table.name), index('run_group_event').on(table.eventId)],
+)
+
+/** Published checklists and limits by SHA-256 of their file, so that what a record pins can always be read again. */
+export const checklistText = sqliteTable('checklist_text', { hash: text('hash').primaryKey(), body: text('body').notNull() })
+export const limitsText = sqliteTable('limits_text', { hash: text('hash').primaryKey(), body: text('body').notNull() })

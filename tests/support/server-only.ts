@@ -1,0 +1,2 @@
+// Stands in for Next's `server-only` marker in tests.
+export {}
