@@ -1,0 +1,14 @@
+let source: () => number = Date.now
+
+/** Milliseconds since the epoch, UTC. The only clock that commands and queries read. */
+export function now(): number {
+  return source()
+}
+
+/** Puts another clock in its place until the returned function is called; for tests. */
+export function setClock(clock: () => number): () => void {
+  source = clock
+  return () => {
+    source = Date.now
+  }
+}

@@ -1,0 +1,42 @@
+import 'server-only'
+import * as z from 'zod/mini'
+
+export interface Env {
+  /** The only origin that pages are served from and unsafe requests may come from; stickers open it. Configured, never derived from a request. */
+  readonly origin: string
+  readonly databaseFile: string
+  readonly production: boolean
+  readonly logLevel: 'fatal' | 'error' | 'warn' | 'info' | 'debug' | 'silent'
+}
+
+const port = z.string().check(z.regex(/^\d{1,5}$/, 'PORT must be a number'))
+const schema = z.object({
+  PORT: z.optional(port),
+  LOCKWIRE_ORIGIN: z.optional(z.url('LOCKWIRE_ORIGIN must be a full address such as https://bay.example.org')),
+  LOCKWIRE_DB: z.optional(z.string().check(z.minLength(1, 'LOCKWIRE_DB must name a file'))),
+  LOCKWIRE_LOG: z.optional(z.enum(['fatal', 'error', 'warn', 'info', 'debug', 'silent'])),
+  NODE_ENV: z.optional(z.string()),
+})
+
+let read: Env | null = null
+
+/** What the process was told by its environment, checked once. Throws with every fault when something is wrong. */
+export function env(): Env {
+  read ??= readEnv(process.env)
+  return read
+}
+
+/** Checks an environment. The server's signing key is made per club and kept in the database, so there is no secret here that could be a default one. */
+export function readEnv(variables: Readonly<Record<string, string | undefined>>): Env {
+  const result = schema.safeParse(variables)
+  if (!result.success) {
+    throw new Error(`Lockwire cannot start: ${result.error.issues.map((issue) => `${issue.path.join('.')}: ${issue.message}`).join('; ')}`)
+  }
+  const { PORT, LOCKWIRE_ORIGIN, LOCKWIRE_DB, LOCKWIRE_LOG, NODE_ENV } = result.data
+  return {
+    origin: new URL(LOCKWIRE_ORIGIN ?? `http://localhost:${PORT ?? '3000'}`).origin,
+    databaseFile: LOCKWIRE_DB ?? './data/lockwire.db',
+    production: NODE_ENV === 'production',
+    logLevel: LOCKWIRE_LOG ?? (NODE_ENV === 'test' ? 'silent' : 'info'),
+  }
+}
