@@ -1,4 +1,5 @@
 import * as z from 'zod/mini'
+import { contract } from './contract'
 import { daySnapshot } from './day-snapshot'
 
 const hash = z.string().check(z.regex(/^[0-9a-f]{64}$/))
@@ -16,7 +17,16 @@ export type SyncPullRequest = z.infer<typeof syncPullRequest>
 export const syncPullResponse = z.object({
   /** The chain at `since` is not the one the device knows: a restored copy. Push everything held, then pull from 0. */
   restored: z.boolean(),
-  records: z.array(z.object({ seq: z.int(), jws: z.string(), hash, chain: hash, disposition: z.enum(['accepted', 'quarantined']), code: z.nullable(z.string()) })),
+  records: z.array(
+    z.object({
+      seq: z.int(),
+      jws: z.string(),
+      hash,
+      chain: hash,
+      disposition: z.enum(['accepted', 'quarantined']),
+      code: z.nullable(z.string()),
+    }),
+  ),
   notes: z.array(z.object({ hash, salt: z.string(), text: z.string() })),
   more: z.boolean(),
   /** Present where the device's is out of date. */
@@ -29,3 +39,16 @@ export const syncPullResponse = z.object({
   chain: z.string(),
 })
 export type SyncPullResponse = z.infer<typeof syncPullResponse>
+
+/** Answered by lib/sync/server/serve-pull. */
+export const syncPull = contract({
+  name: 'sync-pull',
+  method: 'GET',
+  path: '/api/sync/pull',
+  auth: 'device',
+  action: 'day:load',
+  limitBytes: 0,
+  rate: { times: 600, perSeconds: 60 },
+  query: syncPullRequest,
+  response: syncPullResponse,
+})

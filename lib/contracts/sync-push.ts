@@ -1,4 +1,5 @@
 import * as z from 'zod/mini'
+import { contract } from './contract'
 
 const hash = z.string().check(z.regex(/^[0-9a-f]{64}$/))
 
@@ -10,7 +11,9 @@ export const syncPushRequest = z.strictObject({
   certificate: z.string().check(z.maxLength(4096)),
   records: z.array(z.string().check(z.maxLength(32_768))).check(z.maxLength(200)),
   /** Salted free text that records name by hash. */
-  notes: z.array(z.strictObject({ hash, salt: z.string().check(z.maxLength(64)), text: z.string().check(z.maxLength(2000)) })).check(z.maxLength(200)),
+  notes: z
+    .array(z.strictObject({ hash, salt: z.string().check(z.maxLength(64)), text: z.string().check(z.maxLength(2000)) }))
+    .check(z.maxLength(200)),
   /** How many records this device still holds unsent, by its own word. */
   unsent: z.int().check(z.gte(0)),
 })
@@ -30,3 +33,17 @@ export const syncPushResponse = z.strictObject({
   serverTime: z.int(),
 })
 export type SyncPushResponse = z.infer<typeof syncPushResponse>
+
+/** Answered by lib/sync/server/accept-push. A retired or lost device may still push: its stops must arrive. */
+export const syncPush = contract({
+  name: 'sync-push',
+  method: 'POST',
+  path: '/api/sync/push',
+  auth: 'device',
+  action: 'sync:push',
+  evenRetired: true,
+  limitBytes: 8_000_000,
+  rate: { times: 240, perSeconds: 60 },
+  body: syncPushRequest,
+  response: syncPushResponse,
+})

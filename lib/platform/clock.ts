@@ -1,4 +1,5 @@
-let source: () => number = Date.now
+const system = () => Date.now()
+let source: () => number = system
 
 /** Milliseconds since the epoch, UTC. The only clock that commands and queries read. */
 export function now(): number {
@@ -9,6 +10,6 @@ export function now(): number {
 export function setClock(clock: () => number): () => void {
   source = clock
   return () => {
-    source = Date.now
+    source = system
   }
 }
