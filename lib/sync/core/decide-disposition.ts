@@ -82,6 +82,9 @@ function isPermitting(outcome: string): boolean {
   return outcome === 'ok' || outcome === 'advisory'
 }
 
-function differs(shown: { readonly number: string; readonly plateTail: string }, is: { readonly number: string; readonly plateTail: string }): boolean {
+function differs(
+  shown: { readonly number: string; readonly plateTail: string },
+  is: { readonly number: string; readonly plateTail: string },
+): boolean {
   return shown.number !== is.number || shown.plateTail !== is.plateTail
 }

@@ -25,7 +25,8 @@ const BY_KIND: Readonly<Record<Exclude<RecordKind, 'finding' | 'ruling' | 'entry
 
 /** What a record does to a subject, by its kind and outcome: what builds that do not know the kind obey (rule T3). */
 export function effectOf(record: EffectInput | KnownRecord): Effect {
-  if (record.kind === 'finding' || record.kind === 'ruling') return record.outcome === 'ok' || record.outcome === 'advisory' ? 'permits' : 'stops'
+  if (record.kind === 'finding' || record.kind === 'ruling')
+    return record.outcome === 'ok' || record.outcome === 'advisory' ? 'permits' : 'stops'
   if (record.kind !== 'entry-changed') return BY_KIND[record.kind]
   if (record.change.what === 'withdrawn') return 'stops'
   return record.change.what === 'returned' ? 'permits' : 'none'

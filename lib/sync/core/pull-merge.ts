@@ -30,7 +30,8 @@ export function mergePull(cursor: PullCursor, page: SyncPullResponse): PullOutco
   }
   const last = page.records.at(-1)
   const end: PullCursor = last === undefined ? cursor : { seq: last.seq, chain: last.chain }
-  if (page.seq !== end.seq || page.chain !== end.chain) return { state: 'broken', why: `the page ends at ${page.seq}, its records at ${end.seq}` }
+  if (page.seq !== end.seq || page.chain !== end.chain)
+    return { state: 'broken', why: `the page ends at ${page.seq}, its records at ${end.seq}` }
   if (page.more && page.records.length === 0) return { state: 'broken', why: 'more was promised and nothing came' }
   return { state: 'merge', records: page.records, cursor: end, more: page.more }
 }

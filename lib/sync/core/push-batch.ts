@@ -60,7 +60,12 @@ function halve(outbox: Outbox, batch: readonly OutboxItem[], status: 413 | 422):
   }
   const left = without(outbox.items, new Set([culprit.hash]))
   const code = status === 413 ? 'too-large' : 'not-understood'
-  return { outbox: { items: left, limit: PUSH_LIMIT }, answered: [], setAside: [{ hash: culprit.hash, code }], next: left.length === 0 ? 'done' : 'go-on' }
+  return {
+    outbox: { items: left, limit: PUSH_LIMIT },
+    answered: [],
+    setAside: [{ hash: culprit.hash, code }],
+    next: left.length === 0 ? 'done' : 'go-on',
+  }
 }
 
 function settle(outbox: Outbox, batch: readonly OutboxItem[], response: SyncPushResponse): PushOutcome {

@@ -1,4 +1,11 @@
-import { RECORD_KINDS, RECORD_VERSION, type AnyRecord, type KnownRecord, type RecordKind, type UnknownRecord } from '@/lib/inspection/record'
+import {
+  RECORD_KINDS,
+  RECORD_VERSION,
+  type AnyRecord,
+  type KnownRecord,
+  type RecordKind,
+  type UnknownRecord,
+} from '@/lib/inspection/record'
 import type { Subject } from '@/lib/inspection/subject'
 import { effectOf } from './effect-of'
 
@@ -24,7 +31,8 @@ function readEnvelope(payload: Readonly<Record<string, unknown>>): UnknownRecord
   const { v, kind, id, effect, event, device, deviceSeq, actor, at, day } = payload
   const subject = readSubject(payload.subject)
   if (typeof v !== 'number' || typeof kind !== 'string' || kind.length > 60 || subject === null) return null
-  if (!isId(id) || !isId(event) || !isId(device) || !isId(actor) || !isCount(deviceSeq) || !isCount(at) || typeof day !== 'string') return null
+  if (!isId(id) || !isId(event) || !isId(device) || !isId(actor) || !isCount(deviceSeq) || !isCount(at) || typeof day !== 'string')
+    return null
   const known = EFFECTS.find((one) => one === effect)
   if (known === undefined) return null
   return { ...payload, v, kind, id, effect: known, event, subject, device, deviceSeq, actor, at, day }
