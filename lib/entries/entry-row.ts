@@ -27,3 +27,8 @@ export interface RowProblem {
 export function plateKey(plate: string): string {
   return plate.toUpperCase().replace(/[^\p{L}\p{N}]/gu, '')
 }
+
+/** First name and surname as one name, as screens show it. */
+export function fullName(row: Pick<EntryRow, 'firstName' | 'surname'>): string {
+  return `${row.firstName} ${row.surname}`.trim()
+}

@@ -1,5 +1,5 @@
 import type { EntryRow, RowProblem } from './entry-row'
-import { plateKey } from './entry-row'
+import { fullName, plateKey } from './entry-row'
 
 /** An entry the event already has, as far as an import compares it. */
 export interface ExistingEntry {
@@ -11,8 +11,7 @@ export interface ExistingEntry {
   readonly group: string
   readonly passengerSeats: number
   readonly note: string
-  readonly firstName: string
-  readonly surname: string
+  readonly name: string
   readonly email: string
   readonly mobile: string
   /** Somebody has recorded something of it: what changes about it now is a record, not an import. */
@@ -26,7 +25,7 @@ export interface ImportPlan {
   readonly problems: readonly RowProblem[]
 }
 
-const COMPARED = ['model', 'colour', 'group', 'passengerSeats', 'note', 'firstName', 'surname', 'email', 'mobile', 'plate'] as const
+const COMPARED = ['model', 'colour', 'group', 'passengerSeats', 'note', 'name', 'email', 'mobile', 'plate'] as const
 
 /**
  * What importing these rows would do to the event. The same list twice changes nothing the second time. An entry is known by its number;
@@ -64,7 +63,7 @@ export function planImport(rows: readonly EntryRow[], existing: readonly Existin
       })
       continue
     }
-    const fields = COMPARED.filter((field) => entry[field] !== row[field])
+    const fields = COMPARED.filter((field) => entry[field] !== (field === 'name' ? fullName(row) : row[field]))
     if (fields.length === 0) unchanged += 1
     else if (entry.hasRecords)
       problems.push({
