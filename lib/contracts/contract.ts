@@ -87,4 +87,5 @@ export type AnswerOf<C extends Contract> = z.output<C['response']>
 export type CallInput<C extends Contract> = Part<'params', z.input<C['params']>> &
   Part<'query', z.input<C['query']>> &
   Part<'body', z.input<C['body']>>
-type Part<Name extends string, T> = [keyof T] extends [never] ? { readonly [N in Name]?: T } : { readonly [N in Name]: T }
+// The strict empty object is Record<string, never> to the type system.
+type Part<Name extends string, T> = string extends keyof T ? { readonly [N in Name]?: T } : { readonly [N in Name]: T }
