@@ -40,6 +40,8 @@ export const daySnapshot = z.object({
     }),
   ),
   people: z.array(z.object({ id: z.string(), name: z.string() })),
+  /** Enrolment certificates of all devices: whoever holds their records can send them back to a restored server (rule S4). */
+  certificates: z.array(z.string()),
   crew: z.array(z.object({ id: z.string(), name: z.string(), roles: z.array(z.string()) })),
   /** Checklists and limits by their hash: those in force and those any record pins. */
   checklists: z.record(z.string(), z.unknown()),

@@ -7,8 +7,8 @@ const hash = z.string().check(z.regex(/^[0-9a-f]{64}$/))
 /** `GET /api/sync/pull`: query. `at` is the chain hash the device holds at `since` (rule S4); empty at 0. */
 export const syncPullRequest = z.strictObject({
   event: z.string().check(z.maxLength(36)),
-  since: z.coerce.number().check(z.int(), z.gte(0)),
-  at: z.string().check(z.maxLength(64)),
+  since: z.coerce.number().check(z.int(), z.gte(0), z.lte(Number.MAX_SAFE_INTEGER)),
+  at: z.string().check(z.regex(/^([0-9a-f]{64})?$/)),
   /** Version of the snapshot the device holds; empty for none. */
   snapshot: z.string().check(z.maxLength(64)),
 })
@@ -29,7 +29,9 @@ export const syncPullResponse = z.object({
   ),
   notes: z.array(z.object({ hash, salt: z.string(), text: z.string() })),
   more: z.boolean(),
-  /** Present where the device's is out of date. */
+  /** Seq that the log had reached when this page was read; for progress. */
+  head: z.int(),
+  /** Present where the device's is out of date, on the last page only. */
   snapshot: z.nullable(daySnapshot),
   /** The pass list (lib/pass/pass-list), on the last page only. */
   list: z.nullable(z.unknown()),
@@ -40,9 +42,8 @@ export const syncPullResponse = z.object({
 })
 export type SyncPullResponse = z.infer<typeof syncPullResponse>
 
-/** Answered by lib/sync/server/serve-pull. */
 export const syncPull = contract({
-  name: 'sync-pull',
+  name: 'sync.pull',
   method: 'GET',
   path: '/api/sync/pull',
   auth: 'device',

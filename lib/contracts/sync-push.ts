@@ -5,16 +5,17 @@ const hash = z.string().check(z.regex(/^[0-9a-f]{64}$/))
 
 /** `POST /api/sync/push`: a device's records, in deviceSeq order (rule S1). Authenticated by the device's request token, not by a cookie. */
 export const syncPushRequest = z.strictObject({
-  protocol: z.literal(1),
+  protocol: z.int(),
   event: z.string().check(z.maxLength(36)),
-  /** The device's enrolment certificate, so that a restored server accepts it (rule M2). */
-  certificate: z.string().check(z.maxLength(4096)),
-  records: z.array(z.string().check(z.maxLength(32_768))).check(z.maxLength(200)),
+  /** Enrolment certificates of the devices whose records these are: a restored server may have forgotten them (rules M2, S4). */
+  certificates: z.array(z.string().check(z.maxLength(16_384))).check(z.maxLength(255)),
+  /** Compact JWS. One that is too long or no JWS is answered for by itself and never blocks the rest. */
+  records: z.array(z.string()).check(z.maxLength(200)),
   /** Salted free text that records name by hash. */
   notes: z
     .array(z.strictObject({ hash, salt: z.string().check(z.maxLength(64)), text: z.string().check(z.maxLength(2000)) }))
-    .check(z.maxLength(200)),
-  /** How many records this device still holds unsent, by its own word. */
+    .check(z.maxLength(400)),
+  /** How many records this device still holds unsent, by its own word, these included. */
   unsent: z.int().check(z.gte(0)),
 })
 export type SyncPushRequest = z.infer<typeof syncPushRequest>
@@ -26,6 +27,7 @@ export const syncPushResponse = z.strictObject({
       id: z.nullable(z.string()),
       hash,
       outcome: z.enum(['stored', 'duplicate', 'quarantined', 'refused']),
+      /** Why quarantined or refused; for a duplicate, why it once was. */
       code: z.nullable(z.string()),
       seq: z.nullable(z.int()),
     }),
@@ -34,16 +36,16 @@ export const syncPushResponse = z.strictObject({
 })
 export type SyncPushResponse = z.infer<typeof syncPushResponse>
 
-/** Answered by lib/sync/server/accept-push. A retired or lost device may still push: its stops must arrive. */
 export const syncPush = contract({
-  name: 'sync-push',
+  name: 'sync.push',
   method: 'POST',
   path: '/api/sync/push',
   auth: 'device',
-  action: 'sync:push',
+  action: 'day:load',
+  // A fail recorded before the tablet was retired must still arrive (rule T2).
   evenRetired: true,
-  limitBytes: 8_000_000,
-  rate: { times: 240, perSeconds: 60 },
+  limitBytes: 4_000_000,
+  rate: { times: 600, perSeconds: 60 },
   body: syncPushRequest,
   response: syncPushResponse,
 })

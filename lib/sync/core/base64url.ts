@@ -5,9 +5,12 @@ export function base64url(bytes: Uint8Array): string {
   return btoa(binary).replaceAll('+', '-').replaceAll('/', '_').replaceAll('=', '')
 }
 
-/** Bytes of a base64url text without padding; null when it is none. */
+// Spare bits of the last character must be zero, or one signature would have several spellings and one record several hashes.
+const CANONICAL = /^(?:[A-Za-z0-9_-]{4})*(?:[A-Za-z0-9_-][AQgw]|[A-Za-z0-9_-]{2}[AEIMQUYcgkosw048])?$/
+
+/** Bytes of a base64url text without padding, in its only spelling; null when it is none. */
 export function fromBase64url(text: string): Uint8Array<ArrayBuffer> | null {
-  if (!/^[A-Za-z0-9_-]*$/.test(text) || text.length % 4 === 1) return null
+  if (!CANONICAL.test(text)) return null
   const binary = atob(text.replaceAll('-', '+').replaceAll('_', '/'))
   const bytes = new Uint8Array(binary.length)
   for (let index = 0; index < binary.length; index += 1) bytes[index] = binary.charCodeAt(index)
