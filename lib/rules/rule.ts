@@ -11,10 +11,12 @@ export interface Rule<I extends z.ZodMiniType = z.ZodMiniType, P extends z.ZodMi
   readonly title: string
   readonly inputs: I
   readonly params: P
+  /** A complete params set for a track day: what a checklist starts from. `judge` never falls back to it by itself. */
+  readonly defaults: z.infer<P>
   readonly source: readonly Source[]
   readonly evaluate: (inputs: z.infer<I>, params: z.infer<P>, on: CivilDate) => Judgement
-  /** One plain sentence for a judgement of this rule, figures included ("0.9 mm under 1.6 mm"). */
-  readonly explain: (judgement: Judgement) => string
+  /** One plain sentence for a judgement of this rule, figures included ("0.9 mm under 1.6 mm"); total, whatever the facts hold. */
+  readonly explain: (judgement: Pick<Judgement, 'code' | 'facts'>) => string
 }
 
 /** Declares a rule with its types inferred from its schemas. */
