@@ -37,7 +37,7 @@ export type Command<C extends Contract> = (
   deps: Deps,
 ) => OutputOf<C> | Refusal | Promise<OutputOf<C> | Refusal>
 
-/** One line of a stream: `data` is of the contract's response shape. */
+/** A stream: each yield is one event of the contract's response shape. It must end when `deps.signal` aborts (`changesOf` in ./live does). */
 export type StreamCommand<C extends Contract> = (
   input: InputOf<C>,
   actor: ActorFor<C['auth']>,

@@ -26,3 +26,25 @@ export function listen(eventId: string, listener: Listener): () => void {
     if (own.size === 0) all.delete(eventId)
   }
 }
+
+/** Yields at once and then each time the event has changed, several changes at once as one, until the signal aborts. For streams. */
+export async function* changesOf(eventId: string, signal: AbortSignal): AsyncGenerator<undefined> {
+  let [changed, wake] = [true, () => {}]
+  const notice = () => {
+    changed = true
+    wake()
+  }
+  const stop = listen(eventId, notice)
+  signal.addEventListener('abort', notice, { once: true })
+  try {
+    while (!signal.aborted) {
+      if (!changed) await new Promise<void>((resolve) => (wake = resolve))
+      if (signal.aborted) return
+      changed = false
+      yield undefined
+    }
+  } finally {
+    stop()
+    signal.removeEventListener('abort', notice)
+  }
+}

@@ -1,0 +1,27 @@
+import type { Contract } from './contract'
+import { decideCrew, listCrew } from './crew'
+import { enrolDevice, listDevices, retireDevice } from './devices'
+import { join, joinState, makeJoinCode, seeJoinCode } from './join'
+import { me } from './me'
+import { signIn } from './sign-in'
+import { signOut } from './sign-out'
+import { syncPull } from './sync-pull'
+import { syncPush } from './sync-push'
+
+/** Every contract there is. A route whose contract is not in this list fails the architecture test. */
+export const CONTRACTS: readonly Contract[] = [
+  signIn,
+  signOut,
+  me,
+  makeJoinCode,
+  seeJoinCode,
+  join,
+  joinState,
+  listCrew,
+  decideCrew,
+  enrolDevice,
+  listDevices,
+  retireDevice,
+  syncPush,
+  syncPull,
+]
