@@ -16,9 +16,7 @@ export type QuarantineCode =
 
 /** `provisional` is a device's own record before the server has answered; it counts as accepted would (the same `can()` decided). */
 export type Disposition =
-  | { readonly state: 'accepted' }
-  | { readonly state: 'provisional' }
-  | { readonly state: 'quarantined'; readonly code: QuarantineCode }
+  { readonly state: 'accepted' } | { readonly state: 'provisional' } | { readonly state: 'quarantined'; readonly code: QuarantineCode }
 
 /** One line of the log as the fold reads it: the record, the SHA-256 of its JWS, and what the server said of it. */
 export interface LogEntry {

@@ -12,7 +12,10 @@ const instantMs = z.int().check(z.gte(0))
 const code = z.string().check(z.regex(/^[a-z0-9]+(-[a-z0-9]+)*$/), z.maxLength(60))
 const checkId = z.string().check(z.regex(/^[a-z0-9.-]+$/), z.maxLength(120))
 const hashes = z.array(hash).check(z.maxLength(500))
-const figures = z.record(z.string().check(z.maxLength(60)), z.union([z.string().check(z.maxLength(200)), z.number(), z.boolean(), z.null()]))
+const figures = z.record(
+  z.string().check(z.maxLength(60)),
+  z.union([z.string().check(z.maxLength(200)), z.number(), z.boolean(), z.null()]),
+)
 
 const car = z.strictObject({ car: id })
 const person = z.strictObject({ person: id })

@@ -24,8 +24,10 @@ export interface Head {
   /** What it says: a dispensation ranks as advisory. */
   readonly outcome: 'ok' | 'advisory' | 'fail' | 'could-not-see' | 'unseen'
   readonly quarantined: boolean
-  /** An ok or advisory on a perishable check of another venue day (rule F9): shown, not counted. */
+  /** An ok or advisory on a perishable check of another venue day (rule F9), or carried forward on one (F11): shown, not counted. */
   readonly lapsed: boolean
+  /** The fails a dispensation accepts: whoever replaces it names them too (rule M5). Empty for anything else. */
+  readonly beneath: readonly string[]
 }
 
 export interface CheckState {
@@ -37,6 +39,8 @@ export interface CheckState {
   readonly required: boolean
   /** Why it must be seen again: hashes of holds, due recalls and repairs that no head of it answers yet. */
   readonly unanswered: readonly string[]
+  /** Every hold, due recall, wet switch and repair that names this check or its station, ended or not: a new finding's `answers` (rule M5). */
+  readonly toAnswer: readonly string[]
   /** The accepted fail is on, with these conditions (rule F4). */
   readonly dispensation: { readonly hash: string; readonly conditions: string; readonly until: string | null } | null
 }
@@ -59,6 +63,8 @@ export interface SubjectState {
   readonly key: SubjectKey
   readonly verdict: Verdict
   readonly withdrawn: boolean
+  /** The withdrawals in force; a `returned` names them in `basis`. */
+  readonly withdrawnBy: readonly string[]
   readonly blocks: readonly Block[]
   readonly checks: ReadonlyMap<string, CheckState>
   /** Deepest depth of the `presented` heads; null before the first. */
@@ -70,9 +76,18 @@ export interface SubjectState {
   readonly advisories: readonly string[]
   /** Hashes a new pass or band must carry in `answers` to live (rule F7). */
   readonly toAnswer: readonly string[]
-  /** All fails ever recorded of the subject, for the history; quarantined ones too. */
-  readonly defectHistory: readonly { readonly hash: string; readonly check: string; readonly putRight: boolean }[]
+  /** All defects ever recorded of the subject, oldest first: fails (quarantined ones too) and what was put right on the spot. */
+  readonly defectHistory: readonly Defect[]
   readonly passes: readonly PassState[]
+}
+
+export interface Defect {
+  readonly hash: string
+  readonly check: string
+  /** Put right on the spot, or ended by a later look at ok or advisory. */
+  readonly putRight: boolean
+  /** Taken back by whoever recorded it (rule F4). */
+  readonly undone: boolean
 }
 
 export type KillReason =
@@ -105,7 +120,10 @@ export interface FoldContext {
   readonly lastDay: string
   /** Subjects with a signed declaration (verdict *declared only* before anybody looks). */
   readonly declared: ReadonlySet<SubjectKey>
-  /** Group of an entry as the server knows it, before any `entry-changed`; for recalls after a session. */
+  /**
+   * The book of a checklist and limits by their hashes; null where this device does not hold them, which leaves everything not seen.
+   * Called for every subject: memoise it.
+   */
   readonly openBook: (checklistHash: string, limitsHash: string) => import('@/lib/checklist/book').Book | null
 }
 

@@ -1,9 +1,6 @@
 /** What a record is about. A *car* is an entry (one car at one event); a *fit* is a person in a car. */
 export type Subject =
-  | { readonly car: string }
-  | { readonly person: string }
-  | { readonly fit: string; readonly person: string }
-  | { readonly event: string }
+  { readonly car: string } | { readonly person: string } | { readonly fit: string; readonly person: string } | { readonly event: string }
 
 export type SubjectKind = 'car' | 'person' | 'fit' | 'event'
 
@@ -24,4 +21,10 @@ export function subjectKey(subject: Subject): SubjectKey {
   if ('fit' in subject) return `fit:${subject.fit}:${subject.person}`
   if ('person' in subject) return `person:${subject.person}`
   return `event:${subject.event}`
+}
+
+/** The kind of the subject that a key names. */
+export function kindOfKey(key: SubjectKey): SubjectKind {
+  const kind = key.slice(0, key.indexOf(':'))
+  return kind === 'car' || kind === 'fit' || kind === 'person' ? kind : 'event'
 }
