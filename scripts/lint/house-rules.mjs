@@ -50,7 +50,11 @@ const PURE_GLOBALS = [
 
 const PURE_MODULES = ['node:*', 'react', 'react-dom', 'react/*', 'next', 'next/*', 'drizzle-orm', 'drizzle-orm/*', 'better-sqlite3', 'swr', 'server-only', '@/db/*', '@/app/*', '@/lib/platform/*', '@/lib/http/*'] // prettier-ignore
 
-/** The bans that hold everywhere, less those named in `allow` (by key); `pure` adds what a pure folder may not touch. */
+/**
+ * The bans that hold everywhere, less those named in `allow` (by key); `pure` adds what a pure folder may not touch.
+ * @param {{ readonly allow?: readonly string[], readonly pure?: boolean }} options
+ * @returns {Partial<import('eslint').Linter.RulesRecord>}
+ */
 export function banned({ allow = [], pure = false }) {
   const kept = ({ key }) => !allow.includes(key)
   const syntax = SYNTAX_BANS.filter(kept).map(({ selector, message }) => ({ selector, message }))

@@ -84,7 +84,7 @@ function messages(code: string, rules: Linter.RulesRecord, file = 'lib/cars/exam
   const config: Linter.Config = {
     files: ['**/*.ts', '**/*.tsx'],
     plugins: { house: houseRules as never },
-    languageOptions: { parser: tseslint.parser as Linter.Parser, parserOptions: { ecmaFeatures: { jsx: true } } },
+    languageOptions: { parser: tseslint.parser, parserOptions: { ecmaFeatures: { jsx: true } } },
     rules,
   }
   return new Linter().verify(code, [config], { filename: file }).map(({ message }) => message).join('\n') // prettier-ignore
