@@ -1,0 +1,7 @@
+import { join, seeJoinCode } from '@/lib/contracts/join'
+import { askToJoin } from '@/lib/crew/ask-to-join'
+import { describeJoinCode } from '@/lib/crew/describe-join-code'
+import { handle } from '@/lib/http/server'
+
+export const GET = handle(seeJoinCode, describeJoinCode)
+export const POST = handle(join, askToJoin)
