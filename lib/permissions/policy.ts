@@ -22,8 +22,6 @@ export const POLICY = {
   'device:enrol': ['chief', 'scrutineer', 'helper', 'sign-on', 'marshal', 'organiser'],
   'device:retire': ['admin', 'organiser'],
   'day:load': ['chief', 'scrutineer', 'helper', 'sign-on', 'marshal', 'organiser'],
-  /** Every enrolled device hands in what it holds, whatever becomes of each record. */
-  'sync:push': ['chief', 'scrutineer', 'helper', 'sign-on', 'marshal', 'organiser'],
   'record:presented': ['chief', 'scrutineer', 'helper', 'sign-on', 'marshal'],
   /** A `presented` that asks less than the ones before it (rule F12). */
   'record:presented-lowering': ['chief', 'scrutineer'],

@@ -1,11 +1,12 @@
 import 'server-only'
 import { and, eq } from 'drizzle-orm'
 import type { Db } from '@/db/client'
-import { audit, crewMember, device, devicePerson, event, person } from '@/db/schema'
+import { crewMember, device, devicePerson, event, person } from '@/db/schema'
 import { transaction } from '@/db/transaction'
 import type { DeviceCertificate } from '@/lib/contracts/device-certificate'
 import { CREW_ROLES, type CrewRole } from '@/lib/permissions/policy'
 import { newId } from './ids'
+import { writeAudit } from './write-audit'
 
 export const LAST_KID = 255
 
@@ -44,9 +45,7 @@ export function adoptDevice(database: Db, certificate: DeviceCertificate, jws: s
       .run()
     for (const member of certificate.people) adoptPerson(tx, home, certificate, member, now)
     const detail = { device: certificate.device, kid, kidWas: certificate.kid }
-    tx.insert(audit)
-      .values({ id: newId(), clubId: home.clubId, eventId: home.id, at: now, accountId: null, action: 'device-adopted', detail })
-      .run()
+    writeAudit(tx, { clubId: home.clubId, eventId: home.id, at: now, accountId: null, action: 'device-adopted', detail })
     return true
   })
 }

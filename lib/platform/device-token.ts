@@ -1,8 +1,8 @@
 import 'server-only'
 import { and, eq } from 'drizzle-orm'
 import type { Db } from '@/db/client'
-import { device, event } from '@/db/schema'
-import { CERTIFICATE_TYPE, type DeviceCertificate, deviceCertificate } from '@/lib/contracts/device-certificate'
+import { device } from '@/db/schema'
+import type { DeviceCertificate } from '@/lib/contracts/device-certificate'
 import {
   DEVICE_TOKEN_LIFE_SECONDS,
   DEVICE_TOKEN_SKEW_SECONDS,
@@ -14,8 +14,8 @@ import type { DeviceActor } from './actor'
 import { adoptDevice } from './adopt-device'
 import { deviceActor } from './device-actor'
 import { unverifiedPayload, verifyJws } from './jws'
+import { readCertificate } from './read-certificate'
 import { type Refusal, refuse } from './refusal'
-import { serverPublicKey } from './server-key'
 
 /** The parts of a request that its token is bound to. */
 export interface SignedRequest {
@@ -38,7 +38,7 @@ export function deviceOfRequest(database: Db, request: SignedRequest, now: numbe
     .from(device)
     .where(and(eq(device.id, token.device), eq(device.eventId, token.event)))
     .get()
-  const certificate = known ? null : readCertificate(database, request.certificate, token)
+  const certificate = known ? null : certificateFor(database, request.certificate, token)
   const publicKey = known?.publicKey ?? certificate?.publicKey
   if (!publicKey) return refuse('device-not-known')
   // Only now are the claims worth anything: signed by the key of the device they name.
@@ -57,12 +57,7 @@ function tokenFault(token: DeviceToken, request: SignedRequest, now: number): Re
   return null
 }
 
-/** The certificate, if this club's key signed it for the very device and event the token names. */
-function readCertificate(database: Db, jws: string | null, token: DeviceToken): DeviceCertificate | null {
-  const owner = database.select({ clubId: event.clubId }).from(event).where(eq(event.id, token.event)).get()
-  const key = owner ? serverPublicKey(database, owner.clubId) : null
-  if (!jws || !key) return null
-  const read = deviceCertificate.safeParse(verifyJws(jws, CERTIFICATE_TYPE, key))
-  if (!read.success || read.data.device !== token.device || read.data.event !== token.event) return null
-  return read.data
+function certificateFor(database: Db, jws: string | null, token: DeviceToken): DeviceCertificate | null {
+  const says = jws === null ? null : readCertificate(database, token.event, jws)
+  return says?.device === token.device ? says : null
 }
