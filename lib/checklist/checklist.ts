@@ -19,7 +19,15 @@ const sourceSchema = z.strictObject({
 
 /** One value the walk asks for: a number with its unit and the range that is possible at all, a text such as a date code, or one of a list. */
 const measureFieldSchema = z.discriminatedUnion('kind', [
-  z.strictObject({ kind: z.literal('number'), id: z.string(), label: words, unit: z.string(), min: z.number(), max: z.number(), decimals: z.number() }),
+  z.strictObject({
+    kind: z.literal('number'),
+    id: z.string(),
+    label: words,
+    unit: z.string(),
+    min: z.number(),
+    max: z.number(),
+    decimals: z.number(),
+  }),
   z.strictObject({ kind: z.literal('text'), id: z.string(), label: words, maxLength: z.number(), hint: z.optional(z.string()) }),
   z.strictObject({
     kind: z.literal('choice'),
@@ -39,7 +47,7 @@ const ruleInputSchema = z.union([
 
 const reasonSchema = z.strictObject({ id: slug, text: words })
 
-const checkSchema = z.strictObject({
+export const checkSchema = z.strictObject({
   id: checkId,
   subject: z.enum(['car', 'person', 'fit']),
   station: slug,
@@ -73,33 +81,40 @@ const checkSchema = z.strictObject({
   source: z.optional(z.array(sourceSchema)),
 })
 
+export const factSchema = z.strictObject({
+  name: z.string().check(z.regex(/^[a-zA-Z][a-zA-Z0-9]*$/)),
+  subject: z.enum(['car', 'person', 'fit']),
+  label: words,
+  /** When the first screen asks it at all ("head restraint?" only with a harness). */
+  applies: z.optional(conditionSchema),
+  values: z.array(z.strictObject({ value: z.union([z.string(), z.boolean(), z.number()]), label: words })).check(z.minLength(2)),
+})
+
+export const stationSchema = z.strictObject({ id: slug, title: words, short: words, subject: z.enum(['car', 'person', 'fit']) })
+export const placeSchema = z.strictObject({ id: slug, title: words, subject: z.enum(['car', 'person', 'fit']), stand: words })
+
+export const holdReasonSchema = z.strictObject({
+  id: slug,
+  text: words,
+  subject: z.enum(['car', 'person']),
+  stations: z.array(slug),
+  /** Checks as the walk asks them: of a check per corner each corner is named. */
+  checks: z.array(checkId),
+})
+
 export const checklistSchema = z.strictObject({
   id: slug,
-  version: z.number(),
+  version: z.int().check(z.gte(1)),
   title: words,
   kindOfDay: z.enum(['closed-circuit', 'public-road']),
   /** The facts that conditions may read, with their possible values, in the order the first screen of a walk asks them. */
-  facts: z.array(
-    z.strictObject({
-      name: z.string(),
-      subject: z.enum(['car', 'person', 'fit']),
-      label: words,
-      values: z.array(z.strictObject({ value: z.union([z.string(), z.boolean(), z.number()]), label: words })).check(z.minLength(2)),
-    }),
-  ),
-  stations: z.array(z.strictObject({ id: slug, title: words, short: words, subject: z.enum(['car', 'person', 'fit']) })),
-  places: z.array(z.strictObject({ id: slug, title: words, subject: z.enum(['car', 'person', 'fit']), stand: words })),
+  facts: z.array(factSchema),
+  stations: z.array(stationSchema),
+  /** In the order of the walk. */
+  places: z.array(placeSchema),
   checks: z.array(checkSchema),
   /** Why something may be held, and what is to be seen again then. */
-  holdReasons: z.array(
-    z.strictObject({
-      id: slug,
-      text: words,
-      subject: z.enum(['car', 'person']),
-      stations: z.array(slug),
-      checks: z.array(checkId),
-    }),
-  ),
+  holdReasons: z.array(holdReasonSchema),
 })
 
 /** A published checklist, exactly as its file holds it. */
@@ -108,6 +123,9 @@ export type CheckDefinition = Checklist['checks'][number]
 export type Station = Checklist['stations'][number]
 export type Place = Checklist['places'][number]
 export type HoldReason = Checklist['holdReasons'][number]
+export type FactDefinition = Checklist['facts'][number]
+/** What a check, a station or a place belongs to. */
+export type JudgedKind = CheckDefinition['subject']
 
 /** A check as the walk asks it: one place, ids of its corner filled in. */
 export type Check = Omit<CheckDefinition, 'place'> & { readonly place: string }
@@ -115,7 +133,7 @@ export type Check = Omit<CheckDefinition, 'place'> & { readonly place: string }
 /** A set of limits, by rule name; it replaces a check's own `params` key by key and can change nothing else. */
 export const limitsSchema = z.strictObject({
   id: slug,
-  version: z.number(),
+  version: z.int().check(z.gte(1)),
   title: words,
   rules: z.record(slug, z.record(z.string(), z.unknown())),
 })
