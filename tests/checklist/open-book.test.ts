@@ -59,4 +59,8 @@ describe('limits in force', () => {
   test('of a check without a rule are none', () => {
     expect(aBook().byId.get('wheels.cap')).toMatchObject({ params: {}, paramsHash: null })
   })
+
+  test('that no rule could judge by open no book', () => {
+    expect(() => aBook(undefined, { 'tyre-tread': { failBelowMm: 9 } })).toThrow(/rules\.tyre-tread .*wheels\.tread/)
+  })
 })
