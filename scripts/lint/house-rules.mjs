@@ -53,7 +53,7 @@ const PURE_MODULES = ['node:*', 'react', 'react-dom', 'react/*', 'next', 'next/*
 /**
  * The bans that hold everywhere, less those named in `allow` (by key); `pure` adds what a pure folder may not touch.
  * @param {{ readonly allow?: readonly string[], readonly pure?: boolean }} options
- * @returns {Partial<import('eslint').Linter.RulesRecord>}
+ * @returns {Record<string, import('eslint').Linter.RuleEntry>}
  */
 export function banned({ allow = [], pure = false }) {
   const kept = ({ key }) => !allow.includes(key)

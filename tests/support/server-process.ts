@@ -10,6 +10,8 @@ export interface ServerOptions {
   readonly db: string
   /** Left out: a free one. */
   readonly port?: number
+  /** Folder of another built app; left out: ours. */
+  readonly app?: string
   readonly env?: Readonly<Record<string, string>>
 }
 
@@ -30,11 +32,12 @@ export interface RunningServer {
 
 /** Starts the built app (`next start`) as a process of its own and waits until it answers. Throws with its log when it does not. */
 export async function startServer(options: ServerOptions): Promise<RunningServer> {
-  if (!existsSync(join(root, '.next/BUILD_ID'))) throw new Error('There is no build to start. Run `npm run build` first (`npm test` does).')
+  const app = options.app ?? root
+  if (!existsSync(join(app, '.next/BUILD_ID'))) throw new Error('There is no build to start. Run `npm run build` first (`npm test` does).')
   const port = options.port ?? (await freePort())
   const origin = `http://localhost:${port}`
   const child = spawn(process.execPath, [join(root, 'node_modules/next/dist/bin/next'), 'start', '-p', String(port)], {
-    cwd: root,
+    cwd: app,
     detached: true,
     stdio: ['ignore', 'pipe', 'pipe'],
     env: { ...process.env, NODE_ENV: 'production', PORT: String(port), LOCKWIRE_DB: options.db, LOCKWIRE_ORIGIN: origin, ...options.env },
