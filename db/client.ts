@@ -29,7 +29,7 @@ export function openDatabase(file: string): Db {
   client.pragma('busy_timeout = 5000')
   // Without it INSERT OR REPLACE deletes a row past its no-delete trigger.
   client.pragma('recursive_triggers = ON')
-  return drizzle({ client, schema }) as Db
+  return drizzle({ client, schema })
 }
 
 /** Makes this database the one `db()` gives; for tests and scripts that open their own. */

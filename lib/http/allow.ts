@@ -1,9 +1,9 @@
 import 'server-only'
-import type { Db } from '@/db/client'
 import type { Contract } from '@/lib/contracts/contract'
 import { can } from '@/lib/permissions/policy'
 import type { Actor } from '@/lib/platform/actor'
 import { rolesAt } from '@/lib/platform/roles-at'
+import type { Db } from '@/lib/platform/served-database'
 
 /** Whether POLICY lets this actor do what the contract does, at the event its path names. Looks at nothing but the actor's own roles. */
 export function isAllowed(database: Db, contract: Contract, actor: Actor, eventId: string | null): boolean {

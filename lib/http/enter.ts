@@ -1,11 +1,11 @@
 import 'server-only'
-import { db } from '@/db/client'
 import type { Contract, InputOf } from '@/lib/contracts/contract'
 import type { Actor } from '@/lib/platform/actor'
 import { now } from '@/lib/platform/clock'
 import type { Deps } from '@/lib/platform/command'
 import { env } from '@/lib/platform/env'
 import { isRefusal, type Refusal, refuse } from '@/lib/platform/refusal'
+import { servedDatabase } from '@/lib/platform/served-database'
 import { isAllowed } from './allow'
 import { checkOrigin } from './check-origin'
 import { findActor } from './find-actor'
@@ -29,7 +29,7 @@ export interface Entered<C extends Contract> {
  * looked up, so that an answer never tells somebody without the right what exists.
  */
 export async function enter<C extends Contract>(contract: C, request: Request, context: RouteContext): Promise<Entered<C> | Refusal> {
-  const [database, instant, { origin }] = [db(), now(), env()]
+  const [database, instant, { origin }] = [servedDatabase(), now(), env()]
   const bytes = await readBody(request, contract.limitBytes)
   if (isRefusal(bytes)) return bytes
   const foreign = checkOrigin(request, contract, origin)

@@ -1,10 +1,17 @@
 import 'server-only'
 import { headers } from 'next/headers'
-import { db } from '@/db/client'
+import type { Role } from '@/lib/permissions/policy'
 import type { AccountActor } from '@/lib/platform/actor'
+import { rolesAt } from '@/lib/platform/roles-at'
+import { servedDatabase } from '@/lib/platform/served-database'
 import { accountOfCookie } from '@/lib/platform/session'
 
-/** Who is signed in, for a Server Component; null for nobody. What they may do at an event: `can(rolesAt(db(), account, eventId), action)`. */
+/** Who is signed in, for a Server Component; null for nobody. */
 export async function pageAccount(): Promise<AccountActor | null> {
-  return accountOfCookie(db(), (await headers()).get('cookie') ?? '')
+  return accountOfCookie(servedDatabase(), (await headers()).get('cookie') ?? '')
+}
+
+/** The roles somebody holds at an event (null: in the club), for `can()`. Says nothing of whether the event exists. */
+export function pageRoles(account: AccountActor, eventId: string | null): readonly Role[] {
+  return rolesAt(servedDatabase(), account, eventId)
 }

@@ -51,7 +51,10 @@ function events(contract: Contract, source: AsyncIterable<unknown>, signal: Abor
     async pull(controller) {
       try {
         const next = await iterator.next()
-        if (!next.done) return controller.enqueue(encoder.encode(`data: ${JSON.stringify(z.parse(contract.response, next.value))}\n\n`))
+        if (!next.done) {
+          controller.enqueue(encoder.encode(`data: ${JSON.stringify(z.parse(contract.response, next.value))}\n\n`))
+          return
+        }
         clearInterval(heartbeat)
         if (!signal.aborted) controller.close()
       } catch (error) {

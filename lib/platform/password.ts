@@ -11,7 +11,8 @@ const SETTINGS = { algorithm: 2, memoryCost: 19_456, timeCost: 2, parallelism: 1
 
 /** Why a new password is refused; null when it may be used. Length over composition. */
 export function passwordFault(password: string): 'too-short' | 'too-long' | 'too-common' | null {
-  const length = [...password].length
+  // Code points, so that a letter outside the basic plane is not two.
+  const length = Array.from(password).length
   if (length < PASSWORD_MIN_LENGTH) return 'too-short'
   if (length > PASSWORD_MAX_LENGTH) return 'too-long'
   const plain = password.toLowerCase().replaceAll(/[\s._-]/g, '')

@@ -1,5 +1,5 @@
 import { enrolDevice } from '@/lib/contracts/devices'
-import { enrol } from '@/lib/devices/enrol'
+import { enrol } from '@/lib/devices/commands/enrol'
 import { handle } from '@/lib/http/server'
 
 export const POST = handle(enrolDevice, enrol)

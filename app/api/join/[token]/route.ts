@@ -1,6 +1,6 @@
 import { join, seeJoinCode } from '@/lib/contracts/join'
-import { askToJoin } from '@/lib/crew/ask-to-join'
-import { describeJoinCode } from '@/lib/crew/describe-join-code'
+import { askToJoin } from '@/lib/crew/commands/ask-to-join'
+import { describeJoinCode } from '@/lib/crew/queries/describe-join-code'
 import { handle } from '@/lib/http/server'
 
 export const GET = handle(seeJoinCode, describeJoinCode)

@@ -1,5 +1,5 @@
 import { joinState } from '@/lib/contracts/join'
-import { describeClaim } from '@/lib/crew/describe-claim'
+import { describeClaim } from '@/lib/crew/queries/describe-claim'
 import { handle } from '@/lib/http/server'
 
 export const POST = handle(joinState, describeClaim)

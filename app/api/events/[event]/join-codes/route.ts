@@ -1,5 +1,5 @@
 import { makeJoinCode } from '@/lib/contracts/join'
-import { giveJoinCode } from '@/lib/crew/give-join-code'
+import { giveJoinCode } from '@/lib/crew/commands/give-join-code'
 import { handle } from '@/lib/http/server'
 
 export const POST = handle(makeJoinCode, giveJoinCode)
