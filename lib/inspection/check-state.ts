@@ -1,6 +1,7 @@
 import type { BookCheck } from '@/lib/checklist/book'
 import { isCarried, isLook, outcomeOf, severity, type CheckLine } from './check-line'
 import type { CheckGroup } from './check-group'
+import { namedBy } from './edges'
 import type { Demand } from './demands'
 import type { CheckHeads } from './heads'
 import type { Presented } from './presented'
@@ -25,24 +26,28 @@ export function checkState(
   const isPerishable = definitions.length === 0 || definitions.some((definition) => !definition.standing)
   const shown = (heads?.heads ?? []).map((line) => toHead(line, heads as CheckHeads, isPerishable, context.day))
   const counting = shown.filter((head) => !head.lapsed)
-  const answered = new Set(
-    heads
-      ? heads.heads.filter((line) => counting.some(({ hash }) => hash === line.hash)).flatMap((line) => lookAnswers(line, heads.group))
-      : [],
-  )
+  const answered = answeredBy(heads, shown)
   const openRepairs = asked.repairs.map(({ hash }) => hash).filter((hash) => !answered.has(hash))
   const openDemands = asked.demands.filter(({ hash, isLifted }) => !isLifted && !answered.has(hash)).map(({ hash }) => hash)
   return {
     check,
     standing: standing(counting, definitions, heads?.group, presented, check, openRepairs.length > 0),
     heads: shown,
-    disagreement: new Set(counting.map((head) => head.outcome)).size > 1,
+    disagreement: counting.some((head) => head.outcome !== counting[0]?.outcome),
     // A standing demand makes it required too; that is known only when every check is, and added by the caller.
     required: presented.required.has(check) || openRepairs.length > 0,
     unanswered: [...openDemands, ...openRepairs].sort(),
     toAnswer: [...asked.demands, ...asked.repairs].map(({ hash }) => hash).sort(),
     dispensation: dispensationOf(counting),
   }
+}
+
+function answeredBy(heads: CheckHeads | undefined, shown: readonly Head[]): ReadonlySet<string> {
+  const answered = new Set<string>()
+  heads?.heads.forEach((line, index) => {
+    if (!shown[index]?.lapsed) for (const hash of lookAnswers(line, heads.group)) answered.add(hash)
+  })
+  return answered
 }
 
 function toHead(line: CheckLine, { group }: CheckHeads, isPerishable: boolean, day: string): Head {
@@ -56,7 +61,7 @@ function toHead(line: CheckLine, { group }: CheckHeads, isPerishable: boolean, d
     lapsed: mayLapse && isPerishable && (line.record.day !== day || isCarried(line)),
     beneath:
       line.record.kind === 'dispensation'
-        ? namedIn(line, group)
+        ? namedBy(line, group)
             .filter((target) => outcomeOf(target) === 'fail')
             .map(({ hash }) => hash)
         : [],
@@ -71,7 +76,10 @@ function standing(
   check: string,
   isReopened: boolean,
 ): Standing {
-  const worst = [...counting].sort((a, b) => severity(b.outcome) - severity(a.outcome))[0]
+  const worst = counting.reduce<Head | undefined>(
+    (most, head) => (most && severity(most.outcome) >= severity(head.outcome) ? most : head),
+    undefined,
+  )
   if (worst?.outcome === 'fail') return 'fail'
   if (presented.isDerivable && !presented.applicable.has(check)) return 'does-not-apply'
   if (!worst || worst.outcome === 'unseen') return 'not-seen'
@@ -87,7 +95,7 @@ function isDecided(line: CheckLine | undefined, definitions: readonly BookCheck[
   if (line.record.kind === 'dispensation') return true
   if (line.record.kind === 'ruling') {
     // It measured nothing itself: one of the looks it chose from must have.
-    const looks = namedIn(line, group).filter((target) => outcomeOf(target) === 'ok' || outcomeOf(target) === 'advisory')
+    const looks = namedBy(line, group).filter((target) => outcomeOf(target) === 'ok' || outcomeOf(target) === 'advisory')
     return !definitions.some(isMeasured) || looks.some((look) => isDecided(look, definitions, group))
   }
   const { measured, judgement, paramsHash } = line.record
@@ -114,11 +122,7 @@ function hasValue(measured: Readonly<Record<string, unknown>> | undefined): bool
 function lookAnswers(line: CheckLine, group: CheckGroup, seen: ReadonlySet<string> = new Set()): readonly string[] {
   if (line.record.kind === 'finding') return isLook(line) && line.isFull ? line.record.answers : []
   if (seen.has(line.hash)) return []
-  return namedIn(line, group).flatMap((target) => lookAnswers(target, group, new Set([...seen, line.hash])))
-}
-
-function namedIn(line: CheckLine, group: CheckGroup): readonly CheckLine[] {
-  return line.record.basis.flatMap((hash) => group.byHash.get(hash) ?? [])
+  return namedBy(line, group).flatMap((target) => lookAnswers(target, group, new Set([...seen, line.hash])))
 }
 
 function dispensationOf(counting: readonly Head[]): CheckState['dispensation'] {

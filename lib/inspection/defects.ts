@@ -1,5 +1,4 @@
 import { isLook, outcomeOf, type CheckLine } from './check-line'
-import { replacedBy } from './edges'
 import type { CheckHeads } from './heads'
 import type { Defect } from './state'
 
@@ -16,12 +15,9 @@ function defectIn(line: CheckLine, heads: CheckHeads): { readonly at: number; re
   const { outcome, found, at } = line.record
   if (outcome !== 'fail' && found === undefined) return null
   const putRight = outcome === 'fail' ? isPutRight(line, heads) : true
-  return { at, defect: { hash: line.hash, check: heads.group.check, putRight, undone: heads.undone.has(line.hash) } }
+  return { at, defect: { hash: line.hash, check: heads.group.check, putRight, undone: heads.undone.has(line) } }
 }
 
-function isPutRight(fail: CheckLine, { group, undone }: CheckHeads): boolean {
-  return group.lines.some((line) => {
-    const isOver = outcomeOf(line) === 'ok' || outcomeOf(line) === 'advisory'
-    return isOver && isLook(line) && !undone.has(line.hash) && replacedBy(line, group, (one) => one.isFull).includes(fail)
-  })
+function isPutRight(fail: CheckLine, { edges, undone }: CheckHeads): boolean {
+  return [...edges].some(([line, targets]) => isLook(line) && outcomeOf(line) !== 'fail' && !undone.has(line) && targets.includes(fail))
 }

@@ -2,6 +2,8 @@ import type { CheckGroup } from './check-group'
 import { isCarried, isStop, outcomeOf, severity, type CheckLine } from './check-line'
 import { disagreementAmong } from './disagreement'
 
+const NONE: readonly CheckLine[] = []
+
 /** Who is believed: the fold asks with everything adopted so far, a pass with the adoptions it knew. */
 export type IsFull = (line: CheckLine) => boolean
 
@@ -21,8 +23,9 @@ export function isExpired({ record }: CheckLine, { day, lastDay }: Days): boolea
  * A dispensation's edge to its fail is given even when expired or replaced: `supersededIn` decides whether it counts.
  */
 export function replacedBy(line: CheckLine, group: CheckGroup, isFull: IsFull): readonly CheckLine[] {
-  if (!isFull(line)) return []
-  const named = line.record.basis.flatMap((hash) => group.byHash.get(hash) ?? []).filter((target) => target !== line)
+  if (line.record.basis.length === 0 || !isFull(line)) return NONE
+  const named = namedBy(line, group)
+  if (named.length === 0) return NONE
   switch (line.record.kind) {
     case 'ruling':
       return replacedByRuling(line, named, group, isFull)
@@ -32,6 +35,16 @@ export function replacedBy(line: CheckLine, group: CheckGroup, isFull: IsFull): 
       if (line.record.outcome === 'unseen') return named.every((target) => target.record.actor === line.record.actor) ? named : []
       return named.filter((target) => mayReplace(line, target))
   }
+}
+
+/** The lines of the same check that a line names in `basis`, believed or not (rule F1). */
+export function namedBy(line: CheckLine, group: CheckGroup): readonly CheckLine[] {
+  const named: CheckLine[] = []
+  for (const hash of line.record.basis) {
+    const target = group.byHash.get(hash)
+    if (target && target !== line) named.push(target)
+  }
+  return named
 }
 
 /** Whether a finding may take the place of another line: one who could not see ends no fail, and a carried finding is no look. */

@@ -1,7 +1,7 @@
 import { readDay } from './day-log'
 import { foldLog } from './fold-subject'
 import type { LogEntry } from './log-entry'
-import { readLog } from './read-log'
+import { readOwn } from './read-log'
 import type { FoldContext, SubjectState } from './state'
 import { subjectKey, type SubjectKey } from './subject'
 
@@ -22,5 +22,5 @@ export function foldEvent(entries: readonly LogEntry[], context: FoldContext): M
   }
   const day = readDay(ofEvent)
   const keys = [...bySubject.keys()].sort()
-  return new Map(keys.map((key) => [key, foldLog(readLog(bySubject.get(key) ?? [], key), day, context)]))
+  return new Map(keys.map((key) => [key, foldLog(readOwn(bySubject.get(key) ?? [], key), day, context)]))
 }

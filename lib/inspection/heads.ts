@@ -6,67 +6,80 @@ import { isExpired, replacedBy, type Days, type IsFull } from './edges'
 export interface CheckHeads {
   readonly group: CheckGroup
   readonly heads: readonly CheckLine[]
-  /** Lines replaced for good or for now. */
-  readonly superseded: ReadonlySet<string>
+  /** What each line replaces by rule, with everybody believed who is so far; lines without an edge are left out. */
+  readonly edges: ReadonlyMap<CheckLine, readonly CheckLine[]>
+  /** Lines replaced, for good or for now. */
+  readonly superseded: ReadonlySet<CheckLine>
   /** Lines taken back by whoever made them. */
-  readonly undone: ReadonlySet<string>
+  readonly undone: ReadonlySet<CheckLine>
 }
 
 /** Works out the heads of one check: the lines with effect that no other replaces (rules F1, F2, F4). */
 export function headsOf(group: CheckGroup, days: Days): CheckHeads {
-  const isFull: IsFull = (line) => line.isFull
-  const undone = undoneIn(group, isFull)
-  const superseded = new Set<string>()
-  for (const line of group.lines) {
-    for (const target of replacedBy(line, group, isFull))
-      if (!restsOnDispensation(line, target) && !isVoidEdge(line, target, undone)) superseded.add(target.hash)
+  const edges = edgesIn(group)
+  const undone = undoneBy(edges)
+  const superseded = new Set<CheckLine>()
+  for (const [line, targets] of edges) {
+    for (const target of targets) if (!isAcceptance(line, target) && !isVoid(line, target, undone)) superseded.add(target)
   }
   // Only now: a dispensation that was itself replaced, taken back or is over accepts its fail no longer.
-  for (const line of dispensationsIn(group)) {
-    if (superseded.has(line.hash) || isExpired(line, days)) continue
-    for (const target of replacedBy(line, group, isFull)) if (restsOnDispensation(line, target)) superseded.add(target.hash)
+  for (const [line, targets] of edges) {
+    if (superseded.has(line) || isExpired(line, days)) continue
+    for (const target of targets) if (isAcceptance(line, target)) superseded.add(target)
   }
-  const heads = group.lines.filter((line) => !superseded.has(line.hash) && hasEffect(line, group, days))
-  return { group, heads, superseded, undone }
+  const heads = group.lines.filter((line) => !superseded.has(line) && hasEffect(line, edges, days))
+  return { group, heads, edges, superseded, undone }
 }
 
 /**
- * The lines that end this fail (rule F4) when `isFull` says who is believed: empty means it stands. `heads` says what was taken back
- * or replaced in the meantime.
+ * The lines that end this fail (rule F4) when `isFull` says who is believed: empty means it stands. What was taken back or replaced since
+ * is told by `heads`, which knows everything.
  */
-export function endingsOf(fail: CheckLine, { group, superseded, undone }: CheckHeads, days: Days, isFull: IsFull): readonly CheckLine[] {
+export function endingsOf(fail: CheckLine, heads: CheckHeads, days: Days, isFull: IsFull): readonly CheckLine[] {
+  const { group, superseded, undone } = heads
   return group.lines.filter((line) => {
-    if (!replacedBy(line, group, isFull).includes(fail) || isVoidEdge(line, fail, undone)) return false
-    return line.record.kind !== 'dispensation' || (!superseded.has(line.hash) && !isExpired(line, days))
+    if (!endsIn(line, heads, isFull).includes(fail) || isVoid(line, fail, undone)) return false
+    return line.record.kind !== 'dispensation' || (!superseded.has(line) && !isExpired(line, days))
   })
 }
 
-/** A line that can be a head: what stops always; what permits when believed, and only on the grounds it needs. */
-function hasEffect(line: CheckLine, group: CheckGroup, days: Days): boolean {
-  if (line.record.kind === 'dispensation') {
-    return (
-      line.isFull && !isExpired(line, days) && replacedBy(line, group, (one) => one.isFull).some((target) => outcomeOf(target) === 'fail')
-    )
-  }
-  if (isStop(line)) return true
-  // A ruling that settles nothing is no look either, and so gives no ok.
-  return line.isFull && (line.record.kind === 'finding' || replacedBy(line, group, (one) => one.isFull).length > 0)
+/** What a line replaces, by the edges already worked out where nobody's belief hangs on an adoption. */
+function endsIn(line: CheckLine, { group, edges }: CheckHeads, isFull: IsFull): readonly CheckLine[] {
+  const isSettled = group.lines.every((one) => one.adoptedBy.length === 0)
+  return isSettled ? (edges.get(line) ?? []) : replacedBy(line, group, isFull)
 }
 
-function undoneIn(group: CheckGroup, isFull: IsFull): ReadonlySet<string> {
-  const undoing = group.lines.filter((line) => line.record.kind === 'finding' && line.record.outcome === 'unseen')
-  return new Set(undoing.flatMap((line) => replacedBy(line, group, isFull).map((target) => target.hash)))
+function edgesIn(group: CheckGroup): ReadonlyMap<CheckLine, readonly CheckLine[]> {
+  const edges = new Map<CheckLine, readonly CheckLine[]>()
+  for (const line of group.lines) {
+    const targets = replacedBy(line, group, (one) => one.isFull)
+    if (targets.length > 0) edges.set(line, targets)
+  }
+  return edges
+}
+
+/** A line that can be a head: what stops always; what permits when believed, and only on the grounds it needs. */
+function hasEffect(line: CheckLine, edges: CheckHeads['edges'], days: Days): boolean {
+  const targets = edges.get(line) ?? []
+  if (line.record.kind === 'dispensation') return !isExpired(line, days) && targets.some((target) => outcomeOf(target) === 'fail')
+  if (isStop(line)) return true
+  // A ruling that settles nothing is no look either, and so gives no ok.
+  return line.isFull && (line.record.kind === 'finding' || targets.length > 0)
+}
+
+function undoneBy(edges: CheckHeads['edges']): ReadonlySet<CheckLine> {
+  const undone = new Set<CheckLine>()
+  for (const [line, targets] of edges) {
+    if (line.record.kind === 'finding' && line.record.outcome === 'unseen') for (const target of targets) undone.add(target)
+  }
+  return undone
 }
 
 /** A look taken back ends no fail any longer. */
-function isVoidEdge(line: CheckLine, target: CheckLine, undone: ReadonlySet<string>): boolean {
-  return outcomeOf(target) === 'fail' && undone.has(line.hash)
+function isVoid(line: CheckLine, target: CheckLine, undone: ReadonlySet<CheckLine>): boolean {
+  return undone.has(line) && outcomeOf(target) === 'fail'
 }
 
-function restsOnDispensation(line: CheckLine, target: CheckLine): boolean {
+function isAcceptance(line: CheckLine, target: CheckLine): boolean {
   return line.record.kind === 'dispensation' && outcomeOf(target) === 'fail'
-}
-
-function dispensationsIn(group: CheckGroup): readonly CheckLine[] {
-  return group.lines.filter((line) => line.record.kind === 'dispensation')
 }

@@ -1,7 +1,6 @@
 import { outcomeOf, type CheckLine } from './check-line'
 import type { DayLog } from './day-log'
 import type { Demand } from './demands'
-import { replacedBy } from './edges'
 import { endingsOf, type CheckHeads } from './heads'
 import { checksUnder, pinsOf, type Presented } from './presented'
 import type { ReadEntry, SubjectLog } from './read-log'
@@ -68,11 +67,9 @@ export function readKillers(
 
 /** Lines that name the fail and may have ended it, expired dispensations too. */
 function endersOf(fail: CheckLine, heads: CheckHeads): readonly string[] {
-  return heads.group.lines
-    .filter(
-      (line) => outcomeOf(line) !== 'fail' && !isRepair(line, heads) && replacedBy(line, heads.group, (one) => one.isFull).includes(fail),
-    )
-    .map(({ hash }) => hash)
+  return [...heads.edges]
+    .filter(([line, targets]) => targets.includes(fail) && outcomeOf(line) !== 'fail' && !isRepair(line, heads))
+    .map(([line]) => line.hash)
 }
 
 /** Wet switches for which any `presented`, replaced or not, has a check: a correction of the facts revives nothing. */

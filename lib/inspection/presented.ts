@@ -29,7 +29,6 @@ export function readPresented(log: SubjectLog, kind: SubjectKind, context: FoldC
   const all = log.of('presented').filter((entry) => entry.isFull)
   const named = new Set(all.flatMap((entry) => entry.record.basis))
   const heads = all.filter((entry) => !named.has(entry.hash))
-  const definitions = new Map<string, BookCheck[]>()
   const applicable = new Set<string>()
   const required = new Set<string>()
   const books = new Set<Book>()
@@ -44,6 +43,12 @@ export function readPresented(log: SubjectLog, kind: SubjectKind, context: FoldC
     for (const check of applicableChecks(book, kind, record.facts)) applicable.add(check.id)
     for (const check of askedChecks(book, kind, record.facts, record.depth)) if (check.required) required.add(check.id)
   }
+  const definitions = definitionsIn([...books], kind)
+  return { all, heads, depth: deepest(heads), definitions, applicable, required, isDerivable }
+}
+
+function definitionsIn(books: readonly Book[], kind: SubjectKind): ReadonlyMap<string, readonly BookCheck[]> {
+  const definitions = new Map<string, BookCheck[]>()
   for (const book of books) {
     for (const check of book.checks) {
       if (check.subject !== kind) continue
@@ -52,7 +57,7 @@ export function readPresented(log: SubjectLog, kind: SubjectKind, context: FoldC
       else definitions.set(check.id, [check])
     }
   }
-  return { all, heads, depth: deepest(heads), definitions, applicable, required, isDerivable }
+  return definitions
 }
 
 function deepest(heads: readonly PresentedEntry[]): Depth | null {

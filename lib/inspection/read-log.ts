@@ -25,7 +25,15 @@ export interface SubjectLog {
  * vouches for does not count at all.
  */
 export function readLog(entries: readonly LogEntry[], key: SubjectKey): SubjectLog {
-  const own = settled(entries.filter((entry) => subjectKey(entry.record.subject) === key))
+  return readOwn(
+    entries.filter((entry) => subjectKey(entry.record.subject) === key),
+    key,
+  )
+}
+
+/** As `readLog`, for entries already known to be this subject's. */
+export function readOwn(entries: readonly LogEntry[], key: SubjectKey): SubjectLog {
+  const own = settled(entries)
   const adoptions = adoptionsOf(own)
   const byKind = new Map<string, ReadEntry[]>()
   const unknownStops: ReadEntry<UnknownRecord>[] = []

@@ -1,5 +1,4 @@
-import { isCarried, outcomeOf, type CheckLine } from './check-line'
-import { replacedBy } from './edges'
+import { outcomeOf, type CheckLine } from './check-line'
 import type { CheckHeads } from './heads'
 import type { Presented } from './presented'
 
@@ -25,11 +24,11 @@ export function readRepairs(checks: Iterable<CheckHeads>, presented: Presented):
  * Whether the line is a repair. *Put right here* disturbs the car whoever did it, so quarantine does not undo it; a ruling that
  * turns a fail into ok counts too, since the words "replaces a fail" leave it no way out.
  */
-export function isRepair(line: CheckLine, { group }: CheckHeads): boolean {
+export function isRepair(line: CheckLine, { edges }: CheckHeads): boolean {
   const outcome = outcomeOf(line)
   if (line.record.kind === 'dispensation' || (outcome !== 'ok' && outcome !== 'advisory')) return false
   if (line.record.kind === 'finding' && line.record.found !== undefined) return true
-  return !isCarried(line) && replacedBy(line, group, (one) => one.isFull).some((target) => outcomeOf(target) === 'fail')
+  return (edges.get(line) ?? []).some((target) => outcomeOf(target) === 'fail')
 }
 
 /** A check's own repair is its own look: it does not reopen itself. */

@@ -40,6 +40,6 @@ function unfinished({ isLookedAt, isDeclared, isPresented, hasFindings }: Verdic
 }
 
 /** Any head that is advisory or a dispensation, standing or not, and an optional check that could not be seen. */
-function hasReservation(check: CheckState): boolean {
+export function hasReservation(check: CheckState): boolean {
   return check.standing === 'could-not-see' || check.heads.some((head) => !head.lapsed && head.outcome === 'advisory')
 }

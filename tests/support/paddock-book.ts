@@ -75,7 +75,11 @@ export const paddockChecklist: Checklist = {
     aCheck('brakes.pads', { reopens: ['wheels.nuts'], critical: true }),
     aCheck('wheels.tread', {
       measure: [depthField],
-      rule: { name: 'tyre-tread', inputs: { depthMm: { measure: 'depthMm' } }, params: { minMm: 1.6 } },
+      rule: {
+        name: 'tyre-tread',
+        inputs: { leastMm: { measure: 'depthMm' }, innerEdgeMm: { measure: 'depthMm' } },
+        params: { failBelowMm: 1.6, adviseBelowMm: 2 },
+      },
     }),
     aCheck('wheels.nuts', { place: ['front', 'rear'], critical: true }),
     aCheck('seat.mounts', { standing: true }),
@@ -89,8 +93,8 @@ export const paddockChecklist: Checklist = {
   holdReasons: [{ id: 'contact', text: 'light contact', subject: 'car', stations: ['body'], checks: [] }],
 }
 
-function limitsOf(id: string, minMm: number): Limits {
-  return { id, version: 1, title: id, rules: { 'tyre-tread': { minMm } } }
+function limitsOf(id: string, failBelowMm: number): Limits {
+  return { id, version: 1, title: id, rules: { 'tyre-tread': { failBelowMm } } }
 }
 
 export const PADDOCK_CHECKLIST = fakeHash('checklist')
