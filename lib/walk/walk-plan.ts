@@ -1,5 +1,6 @@
 import type { BookCheck } from '@/lib/checklist/book'
 import type { Place } from '@/lib/checklist/checklist'
+import { isOneByOne } from '@/lib/checklist/places'
 import type { CheckState } from '@/lib/inspection/state'
 
 /** One check as the walk shows it. */
@@ -61,11 +62,6 @@ export function nextStop(plan: readonly WalkPlace[], from: WalkStop | null): Wal
   return next ? { place: next.place, check: next.check } : null
 }
 
-/** How many answers this walk takes from a person: each item one by one, and one sentence a place for the rest. */
-export function countAnswers(plan: readonly WalkPlace[]): number {
-  return plan.reduce((sum, place) => sum + place.oneByOne.length + (place.together.length > 0 ? 1 : 0), 0)
-}
-
 function isPartOfWalk(check: BookCheck, asked: ReadonlySet<string>, state: CheckState | undefined): boolean {
   if (asked.has(check.id)) return true
   if (!state) return false
@@ -80,7 +76,7 @@ function toItem(check: BookCheck, state: CheckState | null): WalkItem {
 
 function toPlace(place: Place, all: readonly WalkItem[]): WalkPlace {
   const items = all.filter((item) => item.check.place === place.id && item.check.subject === place.subject)
-  const isSingle = (item: WalkItem) => item.check.critical || item.check.measure !== undefined || needsOwnLook(item)
+  const isSingle = (item: WalkItem) => isOneByOne(item.check) || needsOwnLook(item)
   const rank = (item: WalkItem) => (item.check.critical ? 0 : item.check.measure ? 1 : 2)
   const open = items.filter((item) => !item.answered)
   return {
