@@ -38,6 +38,7 @@ export default tseslint.config(
       'no-var': 'error',
       'react/jsx-no-target-blank': 'error',
       'react/no-danger': 'error',
+      'import/no-anonymous-default-export': 'off',
     },
   },
   {
@@ -70,10 +71,11 @@ export default tseslint.config(
   },
   // A `use…` outside screens is an ordinary verb (`useDatabase`), not a hook.
   { files: ['**/*.ts'], ignores: ['**/use-*.ts'], rules: { 'react-hooks/rules-of-hooks': 'off' } },
+  { files: ['*.mjs', 'app/**/*.mjs', 'lib/**/*.mjs'], rules: banned({}) },
   { files: PURE, ignores: ['**/*.test.ts'], rules: bannedFor.pure },
   { files: ['lib/platform/session.ts', 'lib/platform/session/**'], rules: banned({ allow: ['lucia'] }) },
   { files: ['lib/scanner/**'], rules: banned({ allow: ['html5-qrcode'] }) },
-  { files: ['next.config.ts', 'next-pwa.config.ts', 'service-worker.config.ts'], rules: banned({ allow: ['next-pwa'] }) },
+  { files: ['app/_worker/with-worker.mjs'], rules: banned({ allow: ['next-pwa'] }) },
   { files: ['db/schema/index.ts'], rules: banned({ allow: ['export *'] }) },
   { files: ['lib/platform/log.ts', 'db/seed.ts', 'scripts/**', 'tests/bench/**'], rules: { 'no-console': 'off' } },
   {

@@ -18,6 +18,9 @@ export const CHECKS = {
   unused: () => tool('knip/bin/knip.js', ['--no-progress'], quiet(120)),
 }
 
+/** Collected output is read later, perhaps in a file: no colours. */
+const PLAIN = { NO_COLOR: '1', FORCE_COLOR: '0' }
+
 /** Longest a lane of tests may take before it is stopped and counts as failed, in seconds. */
 const LANE_LIMITS = { unit: 420, dom: 300, server: 420, e2e: 900 }
 
@@ -43,7 +46,7 @@ export async function runTests(name, { show = false, env = {} } = {}) {
   const { code, output } = await tool(
     'vitest/vitest.mjs',
     ['run', '--project', name, '--reporter=dot', '--reporter=json', `--outputFile.json=${report}`],
-    { show, env, timeoutMs: LANE_LIMITS[name] * 1000 },
+    { show, env: { ...(show ? {} : PLAIN), ...env }, timeoutMs: LANE_LIMITS[name] * 1000 },
   )
   const counts = countReport(report, code)
   return tell(name, counts, performance.now() - began, counts.failed === 0 ? '' : output)
@@ -104,5 +107,5 @@ async function typecheck() {
 }
 
 function quiet(limitSeconds) {
-  return { show: false, timeoutMs: limitSeconds * 1000 }
+  return { show: false, env: PLAIN, timeoutMs: limitSeconds * 1000 }
 }

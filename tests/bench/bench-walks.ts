@@ -1,4 +1,5 @@
 import type { BookCheck } from '@/lib/checklist/book'
+import { plateTail } from '@/lib/pass/plate-tail'
 import { RECORD_TYPE } from '@/lib/sync/core/record-type'
 import { newId } from '@/lib/platform/ids'
 import type { BenchTablet } from './bench-tablet'
@@ -34,7 +35,7 @@ function envelope(tablet: BenchTablet, deviceSeq: number, entry: BenchTablet['en
     seen: 0,
     basis: [],
     answers: [],
-    shown: { number: entry.number, plateTail: tailOf(entry.plate) },
+    shown: { number: entry.number, plateTail: plateTail(entry.plate) },
   }
 }
 
@@ -45,9 +46,4 @@ function presented(tablet: BenchTablet, facts: BenchTablet['entries'][number]['f
 
 function looksGood(check: BookCheck) {
   return { kind: 'finding', effect: 'permits', check: check.id, outcome: 'ok' }
-}
-
-/** As the entry's snapshot gives it. */
-function tailOf(plate: string): string {
-  return plate.replaceAll(' ', '').slice(-3)
 }

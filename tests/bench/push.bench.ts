@@ -1,13 +1,13 @@
-import { spawnSync } from 'node:child_process'
 import { copyFileSync, mkdtempSync, rmSync } from 'node:fs'
 import { tmpdir } from 'node:os'
-import { join, resolve } from 'node:path'
+import { join } from 'node:path'
 import { syncPush } from '@/lib/contracts/sync-push'
 import { startServer } from '../support/server-process'
 import { BARE_APP, buildBareApp } from './bare-app'
 import { enrolBenchTablet } from './bench-tablet'
 import { walkBatches } from './bench-walks'
 import { median, row } from './row'
+import { seedBenchDatabase } from './seed-bench-database'
 
 const BATCHES = 60
 const WARM_UP = 10
@@ -18,7 +18,7 @@ const folder = mkdtempSync(join(tmpdir(), 'lockwire-bench-'))
 const ours = join(folder, 'ours.db')
 const bare = join(folder, 'bare.db')
 buildBareApp()
-seed(ours)
+seedBenchDatabase(ours)
 const tablet = enrolBenchTablet(ours)
 copyFileSync(ours, bare)
 const batches = walkBatches(tablet, BATCHES, SIZE)
@@ -83,18 +83,4 @@ async function timedPost(
   const ms = performance.now() - began
   if (!response.ok) throw new Error(`${url} answered ${String(response.status)}: ${text.slice(0, 500)}`)
   return { ms, answer: JSON.parse(text) }
-}
-
-function seed(file: string): void {
-  const root = resolve(import.meta.dirname, '../..')
-  const made = spawnSync(
-    process.execPath,
-    [join(root, 'node_modules/tsx/dist/cli.mjs'), '--conditions=react-server', join(root, 'db/seed.ts')],
-    {
-      cwd: root,
-      env: { ...process.env, LOCKWIRE_DB: file, LOCKWIRE_ORIGIN: 'http://localhost:3000' },
-      encoding: 'utf8',
-    },
-  )
-  if (made.status !== 0) throw new Error(`the seed failed: ${made.stderr}`)
 }
