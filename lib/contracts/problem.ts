@@ -14,6 +14,7 @@ export const PROBLEM_CODES = [
   'device-token-wrong',
   'device-token-late',
   'device-retired',
+  'protocol-too-old',
   'forbidden',
   'missing',
   'rate-limited',

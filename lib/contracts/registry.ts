@@ -2,6 +2,7 @@ import type { Contract } from './contract'
 import { decideCrew, listCrew } from './crew'
 import { enrolDevice, listDevices, retireDevice } from './devices'
 import { join, joinState, makeJoinCode, seeJoinCode } from './join'
+import { live } from './live'
 import { me } from './me'
 import { signIn } from './sign-in'
 import { signOut } from './sign-out'
@@ -24,4 +25,5 @@ export const CONTRACTS: readonly Contract[] = [
   retireDevice,
   syncPush,
   syncPull,
+  live,
 ]

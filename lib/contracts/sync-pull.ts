@@ -43,7 +43,7 @@ export const syncPullResponse = z.object({
 export type SyncPullResponse = z.infer<typeof syncPullResponse>
 
 export const syncPull = contract({
-  name: 'sync.pull',
+  name: 'sync-pull',
   method: 'GET',
   path: '/api/sync/pull',
   auth: 'device',

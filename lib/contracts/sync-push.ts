@@ -37,7 +37,7 @@ export const syncPushResponse = z.strictObject({
 export type SyncPushResponse = z.infer<typeof syncPushResponse>
 
 export const syncPush = contract({
-  name: 'sync.push',
+  name: 'sync-push',
   method: 'POST',
   path: '/api/sync/push',
   auth: 'device',

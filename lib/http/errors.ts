@@ -70,6 +70,12 @@ export const ERRORS: Readonly<Record<ProblemCode, ErrorWords>> = {
     kept: DEVICE_KEEPS,
     todo: 'Go on with another device, or ask the organiser.',
   },
+  'protocol-too-old': {
+    status: 426,
+    what: 'This build of the page is older than the server accepts.',
+    kept: DEVICE_KEEPS,
+    todo: 'Finish this car, then take the new version when it is offered.',
+  },
   forbidden: {
     status: 403,
     what: 'Your role does not allow this.',

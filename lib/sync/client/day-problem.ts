@@ -15,6 +15,9 @@ export type DayProblemCode =
   | 'too-old'
   | 'needs-attention'
   | 'wrong-words'
+  | 'clock-wrong'
+  | 'no-web-locks'
+  | 'not-persisted'
 
 /** What happened, what was kept, what to do: three sentences for a person, and the code for the screen. */
 export interface DayProblem {

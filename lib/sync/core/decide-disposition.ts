@@ -54,7 +54,7 @@ export function decideDisposition(record: AnyRecord, context: DispositionContext
 }
 
 /** Lower depth than a head's, or a fact that a head has and this one lacks (rule F12). */
-function takesAway(record: RecordOf<'presented'>, heads: readonly RecordOf<'presented'>[]): boolean {
+export function takesAway(record: Pick<RecordOf<'presented'>, 'depth' | 'facts'>, heads: readonly RecordOf<'presented'>[]): boolean {
   return heads.some(
     (head) =>
       rank(record.depth) < rank(head.depth) ||

@@ -16,8 +16,8 @@ export interface StoredRecord {
   readonly mine: boolean
   readonly disposition: 'provisional' | 'accepted' | 'quarantined'
   readonly code: string | null
-  /** `unsent` is the outbox; `attention` the server would not take. */
-  readonly out: 'unsent' | 'sent' | 'attention'
+  /** `unsent` is the outbox; `attention` the server would not take; `kept` is another device's that it would not take from us and that one sends itself. */
+  readonly out: 'unsent' | 'sent' | 'attention' | 'kept'
 }
 
 /** The key it is kept under. */

@@ -77,7 +77,8 @@ function settle(outbox: Outbox, batch: readonly OutboxItem[], response: SyncPush
     // An answer for something else is no answer, even where the hash was guessed right and the id was not.
     if (item === undefined || (id !== null && id !== item.id)) continue
     if (outcome === 'refused') setAside.set(hash, { hash, code: code ?? 'refused' })
-    else answered.set(hash, { hash, disposition: outcome === 'quarantined' ? 'quarantined' : 'accepted', code })
+    // A duplicate carries the code it was once quarantined with.
+    else answered.set(hash, { hash, disposition: code === null ? 'accepted' : 'quarantined', code })
   }
   const gone = new Set([...answered.keys(), ...setAside.keys()])
   const items = without(outbox.items, gone)

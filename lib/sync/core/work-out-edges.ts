@@ -48,7 +48,7 @@ function onCheck(draft: EdgeInput, actor: string, state: SubjectState): Edges {
   // One's own look may be taken back, another's never (rule T1): naming it would only have this quarantined.
   const undoes = draft.kind === 'finding' && draft.outcome === 'unseen'
   const heads = undoes ? check.heads.filter((head) => head.record.actor === actor) : check.heads
-  const beneath = heads.flatMap((head) => (head.record.kind === 'dispensation' && !undoes ? head.record.basis : []))
+  const beneath = heads.flatMap((head) => (undoes ? [] : head.beneath))
   return {
     basis: [...new Set([...heads.map(({ hash }) => hash), ...beneath])],
     answers: draft.kind === 'dispensation' ? [] : check.toAnswer,

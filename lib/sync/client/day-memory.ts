@@ -1,0 +1,138 @@
+import type { Book } from '@/lib/checklist/book'
+import type { DaySnapshot } from '@/lib/contracts/day-snapshot'
+import { foldSubject } from '@/lib/inspection/fold-subject'
+import type { LogEntry } from '@/lib/inspection/log-entry'
+import type { FoldContext, SubjectState } from '@/lib/inspection/state'
+import { subjectKey, type SubjectKey } from '@/lib/inspection/subject'
+import { logEntryOf, sendingOrder, type StoredRecord } from '../core/held-record'
+import { openPinnedBook } from '../core/open-pinned-book'
+
+/** All this device holds of the day, opened: what is read many times a second and never waits for the disk. */
+export interface DayMemory {
+  readonly stored: ReadonlyMap<string, StoredRecord>
+  readonly snapshot: () => DaySnapshot | null
+  readonly setSnapshot: (snapshot: DaySnapshot | null) => void
+  /** Takes records in, new or changed. */
+  readonly put: (records: readonly StoredRecord[]) => void
+  readonly remove: (hash: string) => void
+  readonly clear: () => void
+  readonly log: (key: SubjectKey) => readonly LogEntry[]
+  readonly state: (key: SubjectKey, day: string) => SubjectState
+  /** Moves on with each change of this subject or of the event itself. */
+  readonly versionOf: (key: SubjectKey) => string
+  readonly book: (checklistHash: string, limitsHash: string) => Book | null
+  readonly subjects: () => readonly SubjectKey[]
+}
+
+interface Shelf {
+  readonly records: Map<string, { readonly stored: StoredRecord; readonly entry: LogEntry }>
+  version: number
+  log: readonly LogEntry[] | null
+}
+
+const NOTHING: readonly LogEntry[] = []
+
+export function dayMemory(): DayMemory {
+  const stored = new Map<string, StoredRecord>()
+  const shelves = new Map<SubjectKey, Shelf>()
+  const folded = new Map<SubjectKey, { readonly tag: string; readonly state: SubjectState }>()
+  const books = new Map<string, Book | null>()
+  let snapshot: DaySnapshot | null = null
+  let declared: ReadonlySet<SubjectKey> = new Set()
+  let snapshots = 0
+
+  function shelfOf(key: SubjectKey): Shelf {
+    const known = shelves.get(key)
+    if (known !== undefined) return known
+    const made: Shelf = { records: new Map(), version: 0, log: null }
+    shelves.set(key, made)
+    return made
+  }
+
+  function put(records: readonly StoredRecord[]): void {
+    for (const record of records) {
+      const entry = logEntryOf(record)
+      stored.set(record.hash, record)
+      // No record at all: kept on the disk and sent on, read by nobody.
+      if (entry === null) continue
+      const shelf = shelfOf(subjectKey(entry.record.subject))
+      shelf.records.set(record.hash, { stored: record, entry })
+      shelf.version += 1
+      shelf.log = null
+    }
+  }
+
+  function remove(hash: string): void {
+    stored.delete(hash)
+    for (const shelf of shelves.values()) {
+      if (!shelf.records.delete(hash)) continue
+      shelf.version += 1
+      shelf.log = null
+    }
+  }
+
+  function log(key: SubjectKey): readonly LogEntry[] {
+    const shelf = shelves.get(key)
+    if (shelf === undefined) return NOTHING
+    shelf.log ??= [...shelf.records.values()].sort((a, b) => sendingOrder(a.stored, b.stored)).map(({ entry }) => entry)
+    return shelf.log
+  }
+
+  function eventKey(): SubjectKey {
+    return snapshot === null ? 'event:' : subjectKey({ event: snapshot.event.id })
+  }
+
+  function versionOf(key: SubjectKey): string {
+    return `${shelves.get(key)?.version ?? 0}.${shelves.get(eventKey())?.version ?? 0}.${snapshots}`
+  }
+
+  function book(checklistHash: string, limitsHash: string): Book | null {
+    const name = `${checklistHash} ${limitsHash}`
+    const known = books.get(name)
+    if (known !== undefined) return known
+    const opened = snapshot === null ? null : openPinnedBook(snapshot, checklistHash, limitsHash)
+    books.set(name, opened)
+    return opened
+  }
+
+  function state(key: SubjectKey, day: string): SubjectState {
+    const tag = `${versionOf(key)} ${day}`
+    const known = folded.get(key)
+    if (known?.tag === tag) return known.state
+    const context: FoldContext = { day, lastDay: snapshot?.event.lastDay ?? day, declared, openBook: book }
+    const made = foldSubject([...log(key), ...log(eventKey())], key, context)
+    folded.set(key, { tag, state: made })
+    return made
+  }
+
+  function setSnapshot(next: DaySnapshot | null): void {
+    snapshot = next
+    snapshots += 1
+    books.clear()
+    declared = new Set(next?.entries.filter((entry) => entry.declaration !== null).map((entry) => subjectKey({ car: entry.id })) ?? [])
+  }
+
+  function clear(): void {
+    stored.clear()
+    // The shelves stay, emptied and moved on: a fold made from them must not be taken for current.
+    for (const shelf of shelves.values()) {
+      shelf.records.clear()
+      shelf.version += 1
+      shelf.log = null
+    }
+  }
+
+  return {
+    stored,
+    snapshot: () => snapshot,
+    setSnapshot,
+    put,
+    remove,
+    clear,
+    log,
+    state,
+    versionOf,
+    book,
+    subjects: () => [...shelves.keys()],
+  }
+}

@@ -1,0 +1,89 @@
+import 'server-only'
+import type { Db } from '@/db/client'
+import { judgeCheck } from '@/lib/checklist/judge-check'
+import type { LogEntry } from '@/lib/inspection/log-entry'
+import { isKnown, type AnyRecord, type RecordOf } from '@/lib/inspection/record'
+import { subjectKey } from '@/lib/inspection/subject'
+import type { DeviceActor } from '@/lib/platform/actor'
+import type { JudgementOutcome } from '@/lib/rules/judgement'
+import { civilDate } from '@/lib/rules/civil-date'
+import type { DispositionContext } from '../core/decide-disposition'
+import { entryNow } from '../core/entry-now'
+import type { EventFrame } from './event-frame'
+import type { EventLog } from './event-log'
+import { pinnedBook } from './pinned-books'
+
+const WORST: readonly JudgementOutcome[] = ['ok', 'advisory', 'undecided', 'fail']
+
+/** What decides a record's disposition, as the log before it leaves it. Everything dear is worked out only when asked for. */
+export function dispositionContext(
+  database: Db,
+  frame: EventFrame,
+  log: EventLog,
+  record: AnyRecord,
+  device: DeviceActor | null,
+): DispositionContext {
+  const own = log.bySubject.get(subjectKey(record.subject)) ?? []
+  return {
+    enrolled: device !== null,
+    device: {
+      state: device?.state ?? 'active',
+      lastGoodSeq: device?.lastGoodSeq ?? null,
+      people: device?.people.map(({ personId }) => personId) ?? [],
+    },
+    actorRoles: device?.people.find(({ personId }) => personId === record.actor)?.roles ?? [],
+    shown: shownOf(frame, log, record),
+    get presentedHeads() {
+      return presentedHeads(own)
+    },
+    makerOf: (hash) => {
+      const entry = log.byHash.get(hash)
+      return entry !== undefined && subjectKey(entry.record.subject) === subjectKey(record.subject) ? entry.record.actor : null
+    },
+    judge: (finding) => judgeByRule(database, frame, finding, presentedHeads(own)),
+    failsByRule: (hash) => {
+      const named = log.byHash.get(hash)?.record
+      if (named === undefined || !isKnown(named) || named.kind !== 'finding') return false
+      return judgeByRule(database, frame, named, presentedHeads(own)) === 'fail'
+    },
+  }
+}
+
+function shownOf(frame: EventFrame, log: EventLog, { subject }: AnyRecord): DispositionContext['shown'] {
+  const id = 'car' in subject ? subject.car : 'fit' in subject ? subject.fit : null
+  const entry = id === null ? undefined : frame.entries.get(id)
+  if (id === null || entry === undefined) return null
+  const records = log.bySubject.get(subjectKey({ car: id })) ?? []
+  return entryNow(
+    entry,
+    records.map(({ record, disposition }) => ({ record, quarantined: disposition.state === 'quarantined' })),
+  )
+}
+
+function presentedHeads(own: readonly LogEntry[]): readonly RecordOf<'presented'>[] {
+  const believed = own.flatMap(({ hash, record, disposition }) =>
+    isKnown(record) && record.kind === 'presented' && disposition.state === 'accepted' ? [{ hash, record }] : [],
+  )
+  const replaced = new Set(believed.flatMap(({ record }) => record.basis))
+  return believed.filter(({ hash }) => !replaced.has(hash)).map(({ record }) => record)
+}
+
+/** What the check's rule says under the pins in force whose limits the finding was judged under; under all of them where it fits none. The worst counts. */
+function judgeByRule(
+  database: Db,
+  frame: EventFrame,
+  finding: RecordOf<'finding'>,
+  heads: readonly RecordOf<'presented'>[],
+): JudgementOutcome | null {
+  const candidates = heads.flatMap((head) => {
+    const check = pinnedBook(database, head.checklist, head.limits)?.byId.get(finding.check)
+    return check?.rule === undefined ? [] : [{ check, facts: head.facts }]
+  })
+  const fitting = candidates.filter(({ check }) => check.paramsHash === finding.paramsHash)
+  let worst = -1
+  for (const { check, facts } of fitting.length > 0 ? fitting : candidates) {
+    const judgement = judgeCheck(check, finding.measured, facts, civilDate(frame.event.lastDay))
+    if (judgement !== null) worst = Math.max(worst, WORST.indexOf(judgement.outcome))
+  }
+  return WORST[worst] ?? null
+}
