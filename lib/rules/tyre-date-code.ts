@@ -19,9 +19,9 @@ const SEPARATORS = /[\s\-\u2010-\u2015]+/g
 const MISREAD: Readonly<Record<string, string>> = { O: '0', Q: '0', I: '1', Z: '2', S: '5', G: '6' }
 
 /**
- * Reads a date code (3 or 4 digits) or a whole identification number with or without "DOT": 13 symbols (new), 10–12 (older), 7 (retread),
- * 7–11 ending in three digits (before 2000). Case, spaces and hyphens do not matter. An older number of 10 or 11 symbols that ends in four
- * digits is read as WWYY; nothing in the marking itself tells that apart from a size code before three digits.
+ * Reads a date code (3 or 4 digits) or a whole identification number with or without "DOT": 13 symbols (new), 8–12 (older), 7 (retread or
+ * old), 7–11 ending in three digits (before 2000). Case, spaces and hyphens do not matter. An older number of up to 11 symbols that ends in four
+ * digits is read as WWYY; nothing in the marking itself tells that apart from a maker's code that ends in a digit before three more.
  */
 export function readTyreDateCode(text: string): TyreDateCode {
   const symbols = text.toUpperCase().replace(SEPARATORS, '').replace(/^DOT/, '')
@@ -41,8 +41,7 @@ function readSymbols(symbols: string): TyreDateCode {
   const { length } = symbols
   const isNumber = length >= 7 && length <= 13
   if (!isNumber && length !== 3 && length !== 4) return { kind: 'unreadable' }
-  const hasFour = length === 4 || length === 7 || length >= 10
-  if (hasFour && /\d{4}$/.test(symbols)) return weekAndYear(symbols.slice(-4))
+  if (/\d{4}$/.test(symbols)) return weekAndYear(symbols.slice(-4))
   const hasThree = length === 3 || (isNumber && length <= 11)
   if (hasThree && /\d{3}$/.test(symbols)) return weekBefore2000(symbols.slice(-3))
   return { kind: isNumber ? 'no-date' : 'unreadable' }
