@@ -9,6 +9,7 @@ export interface PitAnswer {
   readonly todo: string
   readonly number: string | null
   readonly plateTail: string | null
+  readonly plate: string | null
   readonly colour: string | null
   readonly model: string | null
   readonly groupName: string | null
