@@ -1,0 +1,40 @@
+import Link from 'next/link'
+import { Brand } from '@/app/_ui/brand'
+import { buttonClass } from '@/app/_ui/button'
+import { PageFrame } from '@/app/_ui/page-frame'
+import { ThemeSwitch } from '@/app/_ui/theme-switch'
+
+export default function HomePage() {
+  return (
+    <PageFrame
+      title="Every check is a bolt, and a car runs only while its wire is whole"
+      width="text"
+      navigation={
+        <div className="flex flex-wrap items-center justify-between gap-3">
+          <Brand />
+          <ThemeSwitch />
+        </div>
+      }
+    >
+      <p className="max-w-prose">
+        Lockwire keeps what the scrutineers of a track day saw: each car and each person, by whom, against which limit. The crew works with
+        the network off; the pit exit knows who may leave.
+      </p>
+      <nav aria-label="Where to go" className="mt-8 flex flex-wrap gap-4">
+        <Link className={buttonClass('primary')} href="/sign-in">
+          Sign in
+        </Link>
+        <a className={buttonClass('secondary')} href="/bay">
+          Bay
+        </a>
+        <a className={buttonClass('secondary')} href="/pit-exit">
+          Pit exit
+        </a>
+      </nav>
+      <p className="mt-10 max-w-prose border-t pt-4 text-muted">
+        A pass records what was seen that day without dismantling. It is no certificate and no warranty, and what could not be seen is
+        listed. Local rules, the venue’s licence, road law and makers’ instructions stand above the lists kept here.
+      </p>
+    </PageFrame>
+  )
+}

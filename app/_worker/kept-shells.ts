@@ -1,0 +1,15 @@
+/** Pages that the worker fetches once, without anybody's sign-in, and answers with offline. Each must be the same for everybody. */
+export const SHELLS = ['/bay', '/pit-exit', '/offline'] as const
+
+export type Shell = (typeof SHELLS)[number]
+
+/** Which kept shell answers a navigation to this path; null when the page needs the network. */
+export function shellFor(pathname: string): Shell | null {
+  return SHELLS.find((shell) => pathname === shell || pathname.startsWith(`${shell}/`)) ?? null
+}
+
+/** The build's own files that a shell's HTML asks for. The worker keeps a shell only when it keeps all of these. */
+export function filesOfShell(html: string): readonly string[] {
+  const found = html.match(/\/_next\/static\/[\w\-./%()[\]~@]+?\.(?:js|css|woff2)\b/g) ?? []
+  return [...new Set(found)]
+}
