@@ -12,7 +12,7 @@ export const entryImport = contract({
   action: 'entries:import',
   limitBytes: 8_000_000,
   rate: { times: 30, perSeconds: 60 },
-  params: z.strictObject({ event: z.string().check(z.maxLength(36)) }),
+  params: z.strictObject({ event: z.uuid() }),
   body: z.strictObject({
     fileName: z.string().check(z.maxLength(200)),
     text: z.string(),

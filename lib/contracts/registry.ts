@@ -1,6 +1,8 @@
+import { board } from './board'
 import type { Contract } from './contract'
 import { decideCrew, listCrew } from './crew'
 import { enrolDevice, listDevices, retireDevice } from './devices'
+import { entryImport } from './entry-import'
 import { join, joinState, makeJoinCode, seeJoinCode } from './join'
 import { live } from './live'
 import { me } from './me'
@@ -26,4 +28,6 @@ export const CONTRACTS: readonly Contract[] = [
   syncPush,
   syncPull,
   live,
+  board,
+  entryImport,
 ]

@@ -9,13 +9,15 @@ import { assert } from '@/lib/platform/assert'
 import type { AccountActor } from '@/lib/platform/actor'
 import type { Deps } from '@/lib/platform/command'
 import { newId } from '@/lib/platform/ids'
-import { refuse, type Refusal } from '@/lib/platform/refusal'
+import { announce } from '@/lib/platform/live'
+import { isRefusal, refuse, type Refusal } from '@/lib/platform/refusal'
 import { sha256 } from '@/lib/platform/sha256'
-import type { EntryRow } from './entry-row'
-import { fullName, plateKey } from './entry-row'
-import { existingEntries, type ExistingEntryRow } from './existing-entries'
-import { planImport, type ImportPlan } from './plan-import'
-import { readEntryList, type EntryList } from './read-entry-list'
+import { writeAudit } from '@/lib/platform/write-audit'
+import type { EntryRow } from '../entry-row'
+import { fullName, plateKey } from '../entry-row'
+import { existingEntries, type ExistingEntryRow } from '../queries/existing-entries'
+import { planImport, type ImportPlan } from '../plan-import'
+import { readEntryList, type EntryList } from '../read-entry-list'
 
 /** How many problems an answer carries at most; their true count stands beside them. */
 const PROBLEMS_SHOWN = 500
@@ -29,7 +31,7 @@ export function importEntryList(
   deps: Pick<Deps, 'database' | 'now'>,
 ): Answer | Refusal {
   const list = readEntryList(body.text)
-  return transaction(deps.database, (tx) => {
+  const result = transaction(deps.database, (tx) => {
     const target = tx
       .select()
       .from(event)
@@ -46,6 +48,8 @@ export function importEntryList(
     commit(tx, { target, plan, groups, deps, actor, body })
     return { ...answer, committed: true }
   })
+  if (!isRefusal(result) && result.committed) announce(params.event)
+  return result
 }
 
 function describe(list: EntryList, plan: ImportPlan, groups: readonly { name: string }[], planHash: string): Answer {
@@ -95,9 +99,10 @@ function commit(tx: Db, { target, plan, groups, deps, actor, body }: Commit): vo
       .set({ nextEntryCode: target.nextEntryCode + added, snapshotVersion: sql`${event.snapshotVersion} + 1` })
       .where(eq(event.id, target.id))
       .run()
+  const importId = newId()
   tx.insert(importTable)
     .values({
-      id: newId(),
+      id: importId,
       clubId: target.clubId,
       eventId: target.id,
       textHash: sha256(body.text),
@@ -109,6 +114,9 @@ function commit(tx: Db, { target, plan, groups, deps, actor, body }: Commit): vo
       at: deps.now,
     })
     .run()
+  const detail = { import: importId, added, changed: plan.change.length, unchanged: plan.unchanged }
+  const { clubId, id: eventId } = target
+  writeAudit(tx, { clubId, eventId, at: deps.now, accountId: actor.accountId, action: 'entries-imported', detail })
 }
 
 function addEntry(tx: Db, target: Commit['target'], row: EntryRow, group: string, code: number): void {

@@ -3,7 +3,7 @@ import { and, eq } from 'drizzle-orm'
 import type { Db } from '@/db/client'
 import { car, entry, entryPerson, person, record, runGroup } from '@/db/schema'
 import { subjectKey } from '@/lib/inspection/subject'
-import type { ExistingEntry } from './plan-import'
+import type { ExistingEntry } from '../plan-import'
 
 /** What an entry's rows are called in the database, for a change. */
 export interface ExistingEntryRow extends ExistingEntry {
