@@ -15,7 +15,7 @@ import * as z from 'zod/mini'
 import { isYes, oneOf, wholeBetween, yesNo } from './fields'
 import { missing, worstOf } from './gap'
 import { ageJudged } from './helmet-age'
-import { bestLabel, type HelmetLimits } from './helmet-label'
+import { bestLabel } from './helmet-label'
 import { explainHelmetStandard } from './helmet-standard-words'
 import { advisory, fail, type Judgement } from './judgement'
 import { rule } from './rule'
@@ -55,7 +55,7 @@ const params = z
     needsImpactAnswer: z.boolean(),
   })
   .check(z.refine((p) => p.maxAgeYears === null || p.adviseOverYears === null || p.adviseOverYears <= p.maxAgeYears))
-type Params = z.infer<typeof params> & HelmetLimits
+type Params = z.infer<typeof params>
 
 export const HELMET_STANDARD_DEFAULTS: Params = {
   body: 'track-day',

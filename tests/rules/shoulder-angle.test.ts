@@ -41,6 +41,16 @@ describe('shoulder-angle', () => {
     expect([at(-10, false), at(-10.001, false)]).toEqual(['advisory', 'fail'])
   })
 
+  test('rounding in the arithmetic never pushes a strap on the limit over it, whatever the limit', () => {
+    const whole = Array.from({ length: 79 }, (_, index) => index + 1)
+    const over = whole.filter((limit) => {
+      const dropMm = 1000 * Math.tan((limit * Math.PI) / 180)
+      const limits = { failAboveDeg: limit, adviseAboveDeg: limit, failAboveWithHeadRestraintDeg: limit }
+      return dropMm <= 3000 && judged({ runMm: 1000, dropMm, headRestraint: false }, limits).outcome !== 'ok'
+    })
+    expect(over).toEqual([])
+  })
+
   test('50.2° is said to be 5.2° over the limit', () => {
     const { code, facts } = judged({ runMm: 250, dropMm: 300, headRestraint: false })
     expect(code).toBe('shoulder-angle.over-limit')
