@@ -6,6 +6,8 @@ import { dayProblem } from './problem-of'
 
 /** Room a day needs with plenty to spare: 5,000 records and a photo-less snapshot are under 10 MB. */
 export const ENOUGH_BYTES = 50_000_000
+/** Below this a person is told before the next car, bytes. */
+export const LITTLE_BYTES = 10_000_000
 /** A clock further out than this is told to the person, ms. */
 const CLOCK_LIMIT_MS = 120_000
 
@@ -20,7 +22,7 @@ export async function checkDevice(store: DeviceStore, enrolment: Enrolment, load
   if (offset !== null && Math.abs(offset) > CLOCK_LIMIT_MS) problems.push(dayProblem('clock-wrong'))
   if (!store.locksReachTabs) problems.push(dayProblem('no-web-locks'))
   return {
-    readyOffline: loaded && (room.leftBytes === null || room.leftBytes >= ENOUGH_BYTES / 10),
+    readyOffline: loaded && (room.leftBytes === null || room.leftBytes >= LITTLE_BYTES / 2),
     persisted,
     leftBytes: room.leftBytes,
     webLocks: store.locksReachTabs,

@@ -21,7 +21,8 @@ export interface DayMemory {
   /** Moves on with each change of this subject or of the event itself. */
   readonly versionOf: (key: SubjectKey) => string
   readonly book: (checklistHash: string, limitsHash: string) => Book | null
-  readonly subjects: () => readonly SubjectKey[]
+  /** The server's numbers of all records of these subjects and of the event itself; null for those it has not numbered. */
+  readonly seqs: (keys: readonly SubjectKey[]) => Iterable<number | null>
 }
 
 interface Shelf {
@@ -76,6 +77,10 @@ export function dayMemory(): DayMemory {
     if (shelf === undefined) return NOTHING
     shelf.log ??= [...shelf.records.values()].sort((a, b) => sendingOrder(a.stored, b.stored)).map(({ entry }) => entry)
     return shelf.log
+  }
+
+  function* seqs(keys: readonly SubjectKey[]): Iterable<number | null> {
+    for (const key of [...keys, eventKey()]) for (const { stored: record } of shelves.get(key)?.records.values() ?? []) yield record.seq
   }
 
   function eventKey(): SubjectKey {
@@ -133,6 +138,6 @@ export function dayMemory(): DayMemory {
     state,
     versionOf,
     book,
-    subjects: () => [...shelves.keys()],
+    seqs,
   }
 }

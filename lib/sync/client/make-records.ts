@@ -27,7 +27,8 @@ export interface Maker {
   readonly seen: () => number
   readonly shown: (subject: Subject) => { readonly number: string; readonly plateTail: string }
   readonly state: (subject: Subject) => SubjectState
-  readonly dayLog: () => readonly LogEntry[]
+  /** Records of the subject and of the event itself. */
+  readonly entries: (subject: Subject) => readonly LogEntry[]
   /** Takes in what other tabs have written since; called once the lock is held. */
   readonly catchUp: () => Promise<void>
 }
@@ -101,7 +102,7 @@ function saltNotes(notes: readonly DraftNote[], tools: DayTools): ReadonlyMap<st
 
 function complete(draft: Draft, deviceSeq: number, notes: ReadonlyMap<string, StoredNote>, maker: Maker): KnownRecord {
   const { actor, tools, enrolment } = maker
-  const edges = workOutEdges(draft, actor, maker.state(draft.subject), maker.dayLog())
+  const edges = workOutEdges(draft, { actor, state: maker.state(draft.subject), entries: maker.entries(draft.subject) })
   const named = 'notes' in draft && draft.notes !== undefined ? { notes: draft.notes.map((ref) => notes.get(ref)?.hash ?? ref) } : {}
   const whole = {
     v: RECORD_VERSION,

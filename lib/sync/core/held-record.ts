@@ -1,7 +1,7 @@
 import type { Disposition, LogEntry, QuarantineCode } from '@/lib/inspection/log-entry'
 import type { AnyRecord } from '@/lib/inspection/record'
 import { parseJws } from './jws-parse'
-import { readRecord } from './read-record'
+import { readRecordOrEnvelope } from './read-record'
 
 /** A record as a device keeps it on its disk, one key each. */
 export interface StoredRecord {
@@ -41,8 +41,7 @@ export function dispositionOf({ disposition, code }: Pick<StoredRecord, 'disposi
  */
 export function recordOfJws(jws: string): AnyRecord | null {
   const payload = parseJws(jws)?.payload
-  if (payload === undefined) return null
-  return readRecord(payload) ?? readRecord({ ...payload, v: 0 })
+  return payload === undefined ? null : readRecordOrEnvelope(payload)
 }
 
 /** The order in which held records are sent: as the server once had them, then this device's own as they were made. */

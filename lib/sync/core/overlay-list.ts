@@ -1,37 +1,41 @@
 import type { Verdict } from '@/lib/inspection/state'
-import type { ListedBlock, ListedEntry, ListedPass } from '@/lib/pass/pass-list'
-
-/** What this device's own log says of one entry, beside what the server's list says. */
-export interface OwnWord {
-  readonly verdict: Verdict
-  readonly blocks: readonly ListedBlock[]
-  /** Passes of this device's log that the list does not know yet. */
-  readonly passes: readonly ListedPass[]
-  /** Ids of passes that this device's log kills. */
-  readonly dead: ReadonlyMap<string, string>
-}
+import type { ListedEntry, ListedPass, ListedPerson } from '@/lib/pass/pass-list'
 
 /** Verdicts of the server's list that only the server's next list takes away: a device adds blocks, it lifts none. */
 const STICKS: readonly Verdict[] = ['withdrawn', 'held', 'not passed']
 
-/** A listed entry with what this device knows besides: blocks and kills are added, none is taken away, and an issued pass appears. */
-export function overlayEntry(listed: ListedEntry, own: OwnWord): ListedEntry {
-  const words = new Set(listed.blocks.map(({ kind, words }) => `${kind} ${words}`))
-  const blocks = [...own.blocks.filter((block) => !words.has(`${block.kind} ${block.words}`)), ...listed.blocks]
-  const known = new Set(listed.passes.map(({ id }) => id))
-  const passes = listed.passes.map((pass): ListedPass => {
-    const why = own.dead.get(pass.id)
-    return why !== undefined && pass.state !== 'dead' ? { ...pass, state: 'dead', why } : pass
-  })
+/**
+ * A line of the server's list with what this device's own log says of the entry. The own line may add a block, kill a pass, bring a new pass or band and move
+ * a verdict on; it ends no block and revives nothing.
+ */
+export function overlayEntry(listed: ListedEntry, own: ListedEntry): ListedEntry {
+  const known = new Set(listed.blocks.map(({ kind, words }) => `${kind} ${words}`))
+  const before = new Set(listed.passes.map(({ id }) => id))
   return {
     ...listed,
+    number: own.number,
+    plateTail: own.plateTail,
+    group: own.group,
+    groupName: own.groupName,
     verdict: STICKS.includes(listed.verdict) && !STICKS.includes(own.verdict) ? listed.verdict : own.verdict,
-    blocks,
-    passes: [...passes, ...own.passes.filter(({ id }) => !known.has(id))],
+    blocks: [...own.blocks.filter(({ kind, words }) => !known.has(`${kind} ${words}`)), ...listed.blocks],
+    passes: [...listed.passes.map((pass) => overlayPass(pass, own.passes)), ...own.passes.filter(({ id }) => !before.has(id))],
+    people: listed.people.map((person) => overlayPerson(person, own.people)),
   }
 }
 
-/** Whether the list already reflects all this device holds of a subject: nothing of it is unsent or newer than the list. */
-export function isReflected(records: readonly { readonly seq: number | null }[], listSeq: number): boolean {
-  return records.every(({ seq }) => seq !== null && seq <= listSeq)
+function overlayPass(listed: ListedPass, own: readonly ListedPass[]): ListedPass {
+  const here = own.find(({ id }) => id === listed.id)
+  return listed.state === 'live' && here !== undefined && here.state !== 'live' ? { ...listed, state: here.state, why: here.why } : listed
+}
+
+function overlayPerson(listed: ListedPerson, own: readonly ListedPerson[]): ListedPerson {
+  const here = own.find(({ person }) => person === listed.person)
+  return here === undefined || listed.band === 'held' || listed.fit === 'failed' ? listed : here
+}
+
+/** Whether the list already reflects these records: none of them is unsent or newer. */
+export function isReflected(seqs: Iterable<number | null>, listSeq: number): boolean {
+  for (const seq of seqs) if (seq === null || seq > listSeq) return false
+  return true
 }

@@ -1,15 +1,13 @@
 import 'server-only'
 import type { Db } from '@/db/client'
-import { readDay } from '@/lib/inspection/day-log'
-import { foldLog } from '@/lib/inspection/fold-subject'
-import { readLog } from '@/lib/inspection/read-log'
-import type { FoldContext, SubjectState } from '@/lib/inspection/state'
+import type { SubjectState } from '@/lib/inspection/state'
 import type { SubjectKey } from '@/lib/inspection/subject'
 import { subjectKey } from '@/lib/inspection/subject'
-import { readToken } from './read-token'
+import { readToken } from '../core/read-token'
 import type { EventFrame } from './event-frame'
 import { foldContext } from './event-frame'
 import type { EventLog } from './event-log'
+import { eventStates } from './event-states'
 import { logStatements } from './log-statements'
 
 /** What `subject_state.body` holds: a subject's state as JSON, without its records. */
@@ -47,11 +45,13 @@ export function refreshProjections(database: Db, frame: EventFrame, log: EventLo
   const context = foldContext(database, frame, now)
   const { id: eventId, clubId } = frame.event
   const statements = logStatements(database)
-  for (const { key, state } of foldSubjects(log, keys, eventId, context)) {
+  for (const [key, state] of eventStates(frame, log, keys, context)) {
     const body = JSON.stringify(bodyOf(state))
     statements.putState.run({ eventId, subjectKey: key, clubId, seq: log.seq, day: context.day, verdict: state.verdict, body })
     for (const pass of state.passes) {
       const token = readToken(pass.record.token)
+      // A push takes no pass in whose token cannot be read.
+      if (token === null) continue
       statements.putPass.run({
         eventId,
         recordHash: pass.hash,
@@ -63,14 +63,6 @@ export function refreshProjections(database: Db, frame: EventFrame, log: EventLo
         body: JSON.stringify({ killedBy: pass.killedBy, conditions: pass.conditions, at: pass.record.at }),
       })
     }
-  }
-}
-
-function* foldSubjects(log: EventLog, keys: readonly SubjectKey[], eventId: string, context: FoldContext) {
-  const day = readDay(log.bySubject.get(subjectKey({ event: eventId })) ?? [])
-  for (const key of keys) {
-    if (key.startsWith('event:')) continue
-    yield { key, state: foldLog(readLog(log.bySubject.get(key) ?? [], key), day, context) }
   }
 }
 
