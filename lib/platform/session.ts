@@ -134,7 +134,7 @@ function adapter(database: Db): Adapter {
   }
 }
 
-/** Forgets sign-ins that are over; called now and then, nothing depends on it. */
+/** Forgets sign-ins that are over; done at each new one, nothing depends on it. */
 export async function forgetEndedSessions(database: Db): Promise<void> {
   await sessions(database).deleteExpiredSessions()
 }

@@ -7,7 +7,7 @@ import type { Actor } from '@/lib/platform/actor'
 import type { Deps } from '@/lib/platform/command'
 import { isRightPassword } from '@/lib/platform/password'
 import { type Refusal, refuse } from '@/lib/platform/refusal'
-import { endSession, startSession } from '@/lib/platform/session'
+import { endSession, forgetEndedSessions, startSession } from '@/lib/platform/session'
 import { writeAudit } from '@/lib/platform/write-audit'
 import { countTry, forgetTries } from '../sign-in-throttle'
 
@@ -26,6 +26,7 @@ export async function signInWithPassword(
   await forgetTries(email)
   if (actor.kind === 'account') endSession(deps.database, actor.signInHash)
   deps.replyHeaders.append('set-cookie', await startSession(deps.database, row.id, deps.userAgent))
+  await forgetEndedSessions(deps.database)
   writeAudit(deps.database, { clubId: row.clubId, eventId: null, at: deps.now, accountId: row.id, action: 'signed-in', detail: {} })
   return { accountId: row.id, name: row.name, roles: [...row.roles] }
 }
