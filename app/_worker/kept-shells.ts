@@ -8,8 +8,13 @@ export function shellFor(pathname: string): Shell | null {
   return SHELLS.find((shell) => pathname === shell || pathname.startsWith(`${shell}/`)) ?? null
 }
 
-/** The build's own files that a shell's HTML asks for. The worker keeps a shell only when it keeps all of these. */
+/** The build's own files that a shell's HTML asks for, less those for browsers without modules. */
 export function filesOfShell(html: string): readonly string[] {
   const found = html.match(/\/_next\/static\/[\w\-./%()[\]~@]+?\.(?:js|css|woff2)\b/g) ?? []
-  return [...new Set(found)]
+  return [...new Set(found)].filter((file) => !file.includes('/polyfills-'))
+}
+
+/** Webpack's own runtime: its name changes whenever any file of the build does. */
+export function isRuntime(file: string): boolean {
+  return /\/chunks\/webpack-[0-9a-f]+\.js$/.test(file)
 }

@@ -9,6 +9,9 @@ const KEPT = ['/theme.js', '/icons/icon.svg', '/icons/icon-192.png', '/icons/ico
 /** Chunks of pages that never answer offline: keeping them would cost a crew phone bytes for nothing. */
 const ONLINE_ONLY = /static\/chunks\/app\/(\(|%28)(organiser|entrant|public)|static\/chunks\/app\/(design|p|P|api)\//
 
+/** What only the older router and browsers without modules load; ours have neither. */
+const OLD_ROUTER = /static\/chunks\/(main|framework|polyfills)-/
+
 /**
  * Wraps the build so that next-pwa compiles `app/_worker/worker.ts` into `public/sw.js` with the list of what it keeps.
  * next-pwa's own worker is not used: its defaults answered a signed-out person with another's page. Only in the production build, webpack only.
@@ -26,7 +29,7 @@ export function withWorker(config) {
     reloadOnOnline: false,
     fallbacks: false,
     additionalManifestEntries: KEPT.map((url) => ({ url, revision: revision(url) })),
-    buildExcludes: [/app-build-manifest\.json$/, /dynamic-css-manifest\.json$/, /\.map$/, ONLINE_ONLY],
+    buildExcludes: [/app-build-manifest\.json$/, /dynamic-css-manifest\.json$/, /\.map$/, /sw\.js$/, OLD_ROUTER, ONLINE_ONLY],
     maximumFileSizeToCacheInBytes: 5_000_000,
   })(config)
 }

@@ -1,4 +1,4 @@
-import { filesOfShell, shellFor, SHELLS } from './kept-shells'
+import { filesOfShell, isRuntime, shellFor, SHELLS } from './kept-shells'
 import type { KeptFile, WorkerScope } from './worker-scope'
 
 // Small and dull. It keeps the build's own files and the crew's shells, nothing else: nothing of /api, no page of a person, and
@@ -21,7 +21,7 @@ self.addEventListener('fetch', (event) => {
   const url = new URL(request.url)
   if (request.method !== 'GET' || url.origin !== self.location.origin || url.pathname.startsWith('/api/')) return
   if (request.mode === 'navigate') event.respondWith(answerNavigation(request, url.pathname))
-  else if (PATHS.has(url.pathname)) event.respondWith(answerFile(request, url.pathname))
+  else if (PATHS.has(url.pathname) || url.pathname.startsWith('/_next/static/')) event.respondWith(answerFile(request, url.pathname))
 })
 
 async function install(): Promise<void> {
@@ -51,9 +51,11 @@ async function keepFile(cache: Cache, path: string): Promise<void> {
 
 async function keepShell(cache: Cache, shell: string): Promise<void> {
   const answer = await fetchWhole(shell)
-  // Of another build (the server was renewed this very moment): its scripts would be missing offline.
-  const missing = filesOfShell(await answer.clone().text()).filter((file) => !PATHS.has(decodeURI(file)) && !PATHS.has(file))
-  if (missing.length > 0) throw new Error(`${shell} asks for files that are not kept: ${missing.join(', ')}`)
+  const files = filesOfShell(await answer.clone().text())
+  // Of another build (the server was renewed this very moment): its runtime knows other files than ours, and would ask for them offline.
+  if (!files.some((file) => isRuntime(file) && PATHS.has(file))) throw new Error(`${shell} is of another build than this worker.`)
+  // A chunk that a shell shares with an online page is not on the list, and is needed all the same.
+  await Promise.all(files.filter((file) => !PATHS.has(file)).map((file) => keepFile(cache, file)))
   await cache.put(shell, answer)
 }
 
