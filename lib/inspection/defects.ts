@@ -15,9 +15,13 @@ function defectIn(line: CheckLine, heads: CheckHeads): { readonly at: number; re
   const { outcome, found, at } = line.record
   if (outcome !== 'fail' && found === undefined) return null
   const putRight = outcome === 'fail' ? isPutRight(line, heads) : true
-  return { at, defect: { hash: line.hash, check: heads.group.check, putRight, undone: heads.undone.has(line) } }
+  return { at, defect: { hash: line.hash, check: heads.group.check, putRight, undone: isUndone(line, heads) } }
 }
 
-function isPutRight(fail: CheckLine, { edges, undone }: CheckHeads): boolean {
-  return [...edges].some(([line, targets]) => isLook(line) && outcomeOf(line) !== 'fail' && !undone.has(line) && targets.includes(fail))
+function isPutRight(fail: CheckLine, { edges, takenBack }: CheckHeads): boolean {
+  return [...edges].some(([line, targets]) => isLook(line) && outcomeOf(line) !== 'fail' && !takenBack.has(line) && targets.includes(fail))
+}
+
+function isUndone(fail: CheckLine, { edges }: CheckHeads): boolean {
+  return [...edges].some(([line, targets]) => outcomeOf(line) === 'unseen' && targets.includes(fail))
 }

@@ -10,25 +10,25 @@ export interface CheckHeads {
   readonly edges: ReadonlyMap<CheckLine, readonly CheckLine[]>
   /** Lines replaced, for good or for now. */
   readonly superseded: ReadonlySet<CheckLine>
-  /** Lines taken back by whoever made them. */
-  readonly undone: ReadonlySet<CheckLine>
+  /** Lines taken back by whoever made them, believed or not: to take back a permission is to stop (rule T1). */
+  readonly takenBack: ReadonlySet<CheckLine>
 }
 
 /** Works out the heads of one check: the lines with effect that no other replaces (rules F1, F2, F4). */
 export function headsOf(group: CheckGroup, days: Days): CheckHeads {
   const edges = edgesIn(group)
-  const undone = undoneBy(edges)
+  const takenBack = takenBackIn(group)
   const superseded = new Set<CheckLine>()
   for (const [line, targets] of edges) {
-    for (const target of targets) if (!isAcceptance(line, target) && !isVoid(line, target, undone)) superseded.add(target)
+    for (const target of targets) if (!isAcceptance(line, target) && !isVoid(line, target, takenBack)) superseded.add(target)
   }
   // Only now: a dispensation that was itself replaced, taken back or is over accepts its fail no longer.
   for (const [line, targets] of edges) {
     if (superseded.has(line) || isExpired(line, days)) continue
-    for (const target of targets) if (isAcceptance(line, target)) superseded.add(target)
+    for (const target of targets) if (isAcceptance(line, target) && !isVoid(line, target, takenBack)) superseded.add(target)
   }
   const heads = group.lines.filter((line) => !superseded.has(line) && hasEffect(line, edges, days))
-  return { group, heads, edges, superseded, undone }
+  return { group, heads, edges, superseded, takenBack }
 }
 
 /**
@@ -36,9 +36,9 @@ export function headsOf(group: CheckGroup, days: Days): CheckHeads {
  * is told by `heads`, which knows everything.
  */
 export function endingsOf(fail: CheckLine, heads: CheckHeads, days: Days, isFull: IsFull): readonly CheckLine[] {
-  const { group, superseded, undone } = heads
+  const { group, superseded, takenBack } = heads
   return group.lines.filter((line) => {
-    if (!endsIn(line, heads, isFull).includes(fail) || isVoid(line, fail, undone)) return false
+    if (!endsIn(line, heads, isFull).includes(fail) || isVoid(line, fail, takenBack)) return false
     return line.record.kind !== 'dispensation' || (!superseded.has(line) && !isExpired(line, days))
   })
 }
@@ -67,17 +67,18 @@ function hasEffect(line: CheckLine, edges: CheckHeads['edges'], days: Days): boo
   return line.isFull && (line.record.kind === 'finding' || targets.length > 0)
 }
 
-function undoneBy(edges: CheckHeads['edges']): ReadonlySet<CheckLine> {
-  const undone = new Set<CheckLine>()
-  for (const [line, targets] of edges) {
-    if (line.record.kind === 'finding' && line.record.outcome === 'unseen') for (const target of targets) undone.add(target)
+function takenBackIn(group: CheckGroup): ReadonlySet<CheckLine> {
+  const taken = new Set<CheckLine>()
+  for (const line of group.lines) {
+    if (line.record.kind !== 'finding' || line.record.outcome !== 'unseen') continue
+    for (const target of replacedBy(line, group, () => true)) taken.add(target)
   }
-  return undone
+  return taken
 }
 
-/** A look taken back ends no fail any longer. */
-function isVoid(line: CheckLine, target: CheckLine, undone: ReadonlySet<CheckLine>): boolean {
-  return undone.has(line) && outcomeOf(target) === 'fail'
+/** What was taken back ends no fail any longer. */
+function isVoid(line: CheckLine, target: CheckLine, takenBack: ReadonlySet<CheckLine>): boolean {
+  return takenBack.has(line) && outcomeOf(target) === 'fail'
 }
 
 function isAcceptance(line: CheckLine, target: CheckLine): boolean {
