@@ -13,9 +13,9 @@ import { parseInput } from './parse-input'
 import { takeFromAllowance } from './rate'
 import { readBody } from './read-body'
 
-/** As Next gives it to a route handler. */
+/** As Next gives it to a route handler; for a path without a variable part it resolves to undefined, whatever Next's own type says. */
 export interface RouteContext {
-  readonly params: Promise<object>
+  readonly params: Promise<object | undefined>
 }
 
 export interface Entered<C extends Contract> {
@@ -36,7 +36,8 @@ export async function enter<C extends Contract>(contract: C, request: Request, c
   if (foreign) return foreign
   const actor = await findActor(request, contract, bytes, database, instant)
   if (isRefusal(actor)) return actor
-  const params = (await context.params) as Readonly<Record<string, unknown>>
+  // A path without a variable part comes with no params at all.
+  const params = ((await context.params) ?? {}) as Readonly<Record<string, unknown>>
   const eventId = typeof params.event === 'string' ? params.event : null
   if (!isAllowed(database, contract, actor, eventId)) return refuse('forbidden')
   const limited = await takeFromAllowance(request, contract, actor)

@@ -37,14 +37,17 @@ async function handlerOf({ path, method }: Contract): Promise<RouteHandler> {
   return handler
 }
 
-function paramsOf({ path }: Contract, eventId: string): Record<string, string> {
+/** As Next does: undefined for a path without a variable part. */
+function paramsOf({ path }: Contract, eventId: string): Record<string, string> | undefined {
   const names = [...path.matchAll(/\[([^\]]+)\]/g)].map((match) => match[1] ?? '')
+  if (names.length === 0) return undefined
   return Object.fromEntries(names.map((name) => [name, name === 'event' ? eventId : 'A'.repeat(27)]))
 }
 
 async function asks(contract: Contract, asked: Asked, eventId = event) {
   const path = contract.path.replace('[event]', eventId)
-  return ask(await handlerOf(contract), { method: contract.method, path, params: paramsOf(contract, eventId), ...asked })
+  const params = paramsOf(contract, eventId)
+  return ask(await handlerOf(contract), { method: contract.method, path, ...(params ? { params } : {}), ...asked })
 }
 
 async function signedIn(role: Role): Promise<string> {

@@ -27,7 +27,7 @@ export interface Answer<T> {
 
 /** Asks a route handler as a browser on our own origin would, unless told otherwise. */
 export async function ask<T = Problem>(handler: RouteHandler, asked: Asked = {}): Promise<Answer<T>> {
-  const { method = 'GET', path = '/api/x', params = {}, origin = ORIGIN } = asked
+  const { method = 'GET', path = '/api/x', params, origin = ORIGIN } = asked
   const text = asked.raw ?? (asked.body === undefined ? undefined : JSON.stringify(asked.body))
   const headers = new Headers({ 'content-type': 'application/json', ...asked.headers })
   if (origin !== null) headers.set('origin', origin)
