@@ -72,26 +72,31 @@ export function CheckPanel({ item, facts, lastDay, typed, onTyped, onAnswer, bus
       )}
       <div className="mt-auto grid grid-cols-2 gap-x-12 gap-y-4 pt-5">
         {says === 'advisory' ? (
-          <OutcomeButton outcome="advisory" disabled={busy} onClick={() => answerGood('advisory')}>
+          <OutcomeButton state="advisory" disabled={busy} onClick={() => answerGood('advisory')}>
             {found ? 'Seen again, with a note' : 'May run, with a note'}
           </OutcomeButton>
         ) : (
-          <OutcomeButton outcome="ok" disabled={busy || says !== 'ok'} onClick={() => answerGood('ok')}>
+          <OutcomeButton state="ok" disabled={busy || says !== 'ok'} onClick={() => answerGood('ok')}>
             {found ? 'Seen again, right' : 'Seen so'}
           </OutcomeButton>
         )}
-        <OutcomeButton outcome="fail" disabled={busy || found !== null} onClick={() => setAsking({ for: 'fail' })}>
+        <OutcomeButton state="fail" disabled={busy || found !== null} onClick={() => setAsking({ for: 'fail' })}>
           Not so
         </OutcomeButton>
       </div>
       <div className="grid grid-cols-3 gap-3 pt-4">
-        <Button size="outcome" disabled={busy || found !== null} onClick={() => setAsking({ for: 'put-right' })}>
+        <Button look="secondary" size="large" disabled={busy || found !== null} onClick={() => setAsking({ for: 'put-right' })}>
           Put right here
         </Button>
-        <Button size="outcome" disabled={busy || found !== null || says === 'fail'} onClick={() => setAsking({ for: 'advisory' })}>
+        <Button
+          look="secondary"
+          size="large"
+          disabled={busy || found !== null || says === 'fail'}
+          onClick={() => setAsking({ for: 'advisory' })}
+        >
           Advisory
         </Button>
-        <Button size="outcome" disabled={busy || found !== null} onClick={() => onAnswer({ say: 'could-not-see' }, '')}>
+        <Button look="secondary" size="large" disabled={busy || found !== null} onClick={() => onAnswer({ say: 'could-not-see' }, '')}>
           Could not see
         </Button>
       </div>

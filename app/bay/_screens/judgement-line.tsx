@@ -15,7 +15,7 @@ const SHAPES = { ok: 'ok', advisory: 'advisory', fail: 'fail', undecided: 'none'
 export function JudgementLine({ outcome, words, source }: JudgementLineProps) {
   return (
     <div role="status" aria-live="polite" className="mt-3 flex items-start gap-3">
-      <OutcomeShape outcome={SHAPES[outcome]} className="mt-1 size-6 shrink-0" />
+      <OutcomeShape state={SHAPES[outcome]} className="mt-1 size-7" />
       <div>
         <p className="font-bold">{words}</p>
         {source && source.length > 0 && (

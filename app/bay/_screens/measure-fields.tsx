@@ -3,6 +3,7 @@
 import { useState } from 'react'
 import type { MeasureField } from '@/lib/checklist/checklist'
 import type { Typed } from '@/lib/walk/read-values'
+import { Button } from '@/app/_ui/button'
 import { Keypad } from '@/app/_ui/keypad'
 
 interface MeasureFieldsProps {
@@ -39,14 +40,19 @@ export function MeasureFields({ fields, typed, onTyped }: MeasureFieldsProps) {
         return <ChoiceField key={field.id} field={field} value={typed[field.id] ?? ''} onChange={(value) => set(field.id, value)} />
       })}
       {current && (
-        <Keypad
-          value={typed[current.id] ?? ''}
-          unit={current.unit}
-          decimals={current.decimals}
-          allowNegative={current.min < 0}
-          onChange={(value) => set(current.id, value)}
-          onDone={next}
-        />
+        <div className="grid gap-2">
+          <Keypad
+            label={current.label}
+            value={typed[current.id] ?? ''}
+            unit={current.unit}
+            allowsDecimal={current.decimals > 0}
+            allowsNegative={current.min < 0}
+            onChange={(value) => set(current.id, value)}
+          />
+          <Button look="secondary" onClick={next}>
+            {current === numbers.at(-1) ? 'Done' : 'Next value'}
+          </Button>
+        </div>
       )}
     </div>
   )

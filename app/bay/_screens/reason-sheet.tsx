@@ -3,7 +3,7 @@
 import { useState } from 'react'
 import type { BookCheck } from '@/lib/checklist/book'
 import { Button } from '@/app/_ui/button'
-import { Sheet } from '@/app/_ui/sheet'
+import { Sheet } from '@/app/_ui/dialog'
 
 export interface ReasonGiven {
   readonly id: string
@@ -27,7 +27,7 @@ export function ReasonSheet({ check, title, onReason, onClose }: ReasonSheetProp
     onReason({ id, note: note.trim() })
   }
   return (
-    <Sheet title={title} onClose={onClose}>
+    <Sheet isOpen title={title} onClose={onClose}>
       <label className="grid gap-1">
         <span>In your own words{asked ? ' (needed for this one)' : ' (if you like)'}</span>
         <input
@@ -45,7 +45,7 @@ export function ReasonSheet({ check, title, onReason, onClose }: ReasonSheetProp
       )}
       <div className="mt-4 grid gap-3">
         {check.reasons.map((reason) => (
-          <Button key={reason.id} size="outcome" onClick={() => pick(reason.id)}>
+          <Button key={reason.id} look="secondary" size="large" onClick={() => pick(reason.id)}>
             {reason.text}
           </Button>
         ))}

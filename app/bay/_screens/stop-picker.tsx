@@ -1,0 +1,65 @@
+import { OutcomeShape, type OutcomeState } from '@/app/_ui/outcome-shape'
+import type { WalkItem, WalkPlace, WalkStop } from '@/lib/walk/walk-plan'
+
+interface StopPickerProps {
+  readonly here: WalkPlace
+  readonly stop: WalkStop
+  readonly onPick: (stop: WalkStop) => void
+}
+
+/** What this place asks, in order, each with how it stands: a skipped check leaves a visible hole, and any can be jumped to. */
+export function StopPicker({ here, stop, onPick }: StopPickerProps) {
+  const stops = [
+    ...here.oneByOne.map((item) => ({ check: item.check.id, words: item.check.short, state: stateOf(item) })),
+    ...(here.together.length > 0 ? [{ check: null, words: 'the rest', state: restState(here.together) }] : []),
+  ]
+  return (
+    <ol className="mt-2 flex gap-1 overflow-x-auto pb-1" aria-label={`Checks at ${here.place.title}`}>
+      {stops.map(({ check, words, state }) => (
+        <li key={check ?? 'rest'} className="shrink-0">
+          <button
+            type="button"
+            aria-current={stop.check === check ? 'step' : undefined}
+            onClick={() => onPick({ place: here.place.id, check })}
+            className="target flex items-center gap-2 border-b-4 border-transparent px-2 aria-[current=step]:border-accent aria-[current=step]:font-bold"
+          >
+            <OutcomeShape state={state} className="size-5" label={STATE_WORDS[state]} />
+            {words}
+          </button>
+        </li>
+      ))}
+    </ol>
+  )
+}
+
+const STATE_WORDS: Readonly<Record<OutcomeState, string>> = {
+  ok: 'ok',
+  advisory: 'advisory',
+  fail: 'fail',
+  ask: 'could not see or undecided',
+  none: 'not seen yet',
+  na: 'does not apply',
+  held: 'held',
+}
+
+/** The shape of one check as it stands. */
+export function stateOf(item: WalkItem): OutcomeState {
+  if (item.seeAgain) return 'none'
+  switch (item.state?.standing) {
+    case 'ok':
+    case 'advisory':
+    case 'fail':
+      return item.state.disagreement ? 'ask' : item.state.standing
+    case 'could-not-see':
+    case 'undecided':
+      return 'ask'
+    case 'does-not-apply':
+      return 'na'
+    default:
+      return 'none'
+  }
+}
+
+function restState(items: readonly WalkItem[]): OutcomeState {
+  return items.every((item) => item.answered) ? 'ok' : 'none'
+}
