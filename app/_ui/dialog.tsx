@@ -59,8 +59,3 @@ export function Dialog({ isOpen, onClose, title, children, actions, from = 'midd
     </dialog>
   )
 }
-
-/** A dialog that rises from the lower edge; a press beside it closes it. */
-export function Sheet(props: Omit<DialogProps, 'from' | 'closesOutside'>) {
-  return <Dialog {...props} from="below" closesOutside />
-}
