@@ -27,6 +27,9 @@ const server = await startServer({ db: ours, env: quiet })
 const bareServer = await startServer({ db: bare, app: BARE_APP, env: { BARE_KEY: tablet.publicKey, BARE_CLUB: tablet.event.clubId } })
 try {
   await measure()
+} catch (error) {
+  process.stderr.write(`What the servers logged:\n${server.log()}\n${bareServer.log()}\n`)
+  throw error
 } finally {
   await server.stop()
   await bareServer.stop()
@@ -55,7 +58,7 @@ function perSecond(ms: number): string {
 }
 
 async function push(records: readonly string[]): Promise<number> {
-  const body = JSON.stringify({ protocol: 1, event: tablet.event.id, certificate: tablet.certificate, records, notes: [], unsent: 0 })
+  const body = JSON.stringify({ protocol: 1, event: tablet.event.id, certificates: [tablet.certificate], records, notes: [], unsent: 0 })
   const headers = { 'content-type': 'application/json', authorization: tablet.authorize('POST', syncPush.path, body) }
   const { ms, answer } = await timedPost(`${server.origin}${syncPush.path}`, headers, body)
   const outcomes = (answer as { answers: readonly { outcome: string; code: string | null }[] }).answers
