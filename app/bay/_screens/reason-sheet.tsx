@@ -3,7 +3,7 @@
 import { useState } from 'react'
 import type { BookCheck } from '@/lib/checklist/book'
 import { Button } from '@/app/_ui/button'
-import { Sheet } from '@/app/_ui/dialog'
+import { Sheet } from '@/app/_ui/sheet'
 
 export interface ReasonGiven {
   readonly id: string
