@@ -33,10 +33,21 @@ export function readEnv(variables: Readonly<Record<string, string | undefined>>)
     throw new Error(`Lockwire cannot start: ${result.error.issues.map((issue) => `${issue.path.join('.')}: ${issue.message}`).join('; ')}`)
   }
   const { PORT, LOCKWIRE_ORIGIN, LOCKWIRE_DB, LOCKWIRE_LOG, NODE_ENV } = result.data
+  const origin = new URL(LOCKWIRE_ORIGIN ?? `http://localhost:${PORT ?? '3000'}`)
+  if (!isTrustworthy(origin)) {
+    throw new Error(
+      `Lockwire cannot start: LOCKWIRE_ORIGIN is ${origin.origin}. Without https nobody could sign in or record there; give an https address, or http://localhost for trying out.`,
+    )
+  }
   return {
-    origin: new URL(LOCKWIRE_ORIGIN ?? `http://localhost:${PORT ?? '3000'}`).origin,
+    origin: origin.origin,
     databaseFile: LOCKWIRE_DB ?? './data/lockwire.db',
     production: NODE_ENV === 'production',
     logLevel: LOCKWIRE_LOG ?? (NODE_ENV === 'test' ? 'silent' : 'info'),
   }
+}
+
+/** Browsers take the sign-in's cookie and give keys, camera and worker only to https and to the machine itself. */
+function isTrustworthy({ protocol, hostname }: URL): boolean {
+  return protocol === 'https:' || (protocol === 'http:' && ['localhost', '127.0.0.1', '[::1]'].includes(hostname))
 }
