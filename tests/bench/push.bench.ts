@@ -47,10 +47,11 @@ async function measure(): Promise<void> {
   }
   const pushMs = median(times.push.slice(WARM_UP))
   const bareMs = median(times.bare.slice(WARM_UP))
-  const ratio = bareMs / pushMs
+  // Of neighbours in time, then the middle one: a busy second of the machine touches both of a pair.
+  const ratio = median(times.push.map((ms, index) => (times.bare[index] ?? ms) / ms).slice(WARM_UP))
   row({ what: `push of ${String(SIZE)} records, median of ${String(BATCHES - WARM_UP)}`, value: perSecond(pushMs) })
   row({ what: 'bare route: same signatures, same rows', value: perSecond(bareMs) })
-  row({ what: 'push ÷ bare route', value: ratio.toFixed(2), aim: `≥ ${String(AIM)}`, met: ratio >= AIM })
+  row({ what: 'push ÷ bare route (records/s, median of pairs)', value: ratio.toFixed(2), aim: `≥ ${String(AIM)}`, met: ratio >= AIM })
 }
 
 function perSecond(ms: number): string {
