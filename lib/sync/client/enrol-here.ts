@@ -39,7 +39,8 @@ export async function enrolHere(request: EnrolRequest, stores: BrowserStores, no
   const phone = await stores.phone()
   try {
     const pending = `pending:${request.event}`
-    const key = ((await phone.read(pending)) as DeviceKey | undefined) ?? (await makeDeviceKey())
+    const key =
+      (await keyHere(request.event, phone, stores)) ?? ((await phone.read(pending)) as DeviceKey | undefined) ?? (await makeDeviceKey())
     await phone.commit({ put: [[pending, key]] })
     const body = {
       event: request.event,
@@ -62,6 +63,17 @@ export async function enrolHere(request: EnrolRequest, stores: BrowserStores, no
   } finally {
     phone.close()
   }
+}
+
+/** The key this browser already has for the event: a second person on one tablet joins its device, or its log would fall in two. */
+async function keyHere(event: string, phone: DeviceStore, stores: BrowserStores): Promise<DeviceKey | null> {
+  const rows = (await phone.list('device:')).map(([, value]) => value as EnrolledHere)
+  const known = rows.find((row) => row.event === event)
+  if (known === undefined) return null
+  const store = await stores.device(event, known.device)
+  const enrolment = (await store.read(KEYS.enrolment)) as Enrolment | undefined
+  store.close()
+  return enrolment?.key ?? null
 }
 
 /** What this browser is enrolled for, the latest first. */
