@@ -19,7 +19,7 @@ export async function signInWithPassword(
 ): Promise<OutputOf<typeof signIn> | Refusal> {
   const { email, password } = input.body
   const wait = await countTry(email)
-  if (wait > 0) return refuse('too-many-tries', { retryAfterSeconds: wait })
+  if (wait > 0) return refuse('too-many-tries', { retryAfterSeconds: wait, todo: waitInWords(wait) })
   const row = deps.database.select().from(account).where(eq(account.email, email)).get()
   const right = await isRightPassword(row?.passwordHash ?? null, password)
   if (!row || !right) return refuse('sign-in-refused')
@@ -29,4 +29,9 @@ export async function signInWithPassword(
   await forgetEndedSessions(deps.database)
   writeAudit(deps.database, { clubId: row.clubId, eventId: null, at: deps.now, accountId: row.id, action: 'signed-in', detail: {} })
   return { accountId: row.id, name: row.name, roles: [...row.roles] }
+}
+
+function waitInWords(seconds: number): string {
+  const minutes = Math.ceil(seconds / 60)
+  return `Try again in ${minutes === 1 ? 'a minute' : `${minutes} minutes`}. The right password is not taken sooner either.`
 }

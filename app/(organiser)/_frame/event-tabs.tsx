@@ -1,0 +1,41 @@
+import Link from 'next/link'
+import { type Action, can, type Role } from '@/lib/permissions/policy'
+
+export type EventTab = 'board' | 'entries' | 'import' | 'people' | 'devices'
+
+const TABS: readonly { readonly tab: EventTab; readonly label: string; readonly action: Action }[] = [
+  { tab: 'board', label: 'Board', action: 'board:see' },
+  { tab: 'entries', label: 'Entries', action: 'entries:see' },
+  { tab: 'import', label: 'Import', action: 'entries:import' },
+  { tab: 'people', label: 'People', action: 'crew:see' },
+  { tab: 'devices', label: 'Devices', action: 'crew:see' },
+]
+
+/** The pages of an event that these roles may open. */
+export function EventTabs({
+  eventId,
+  current,
+  roles,
+}: {
+  readonly eventId: string
+  readonly current: EventTab
+  readonly roles: readonly Role[]
+}) {
+  return (
+    <nav aria-label="Event" className="-mx-4 overflow-x-auto px-4 sm:mx-0 sm:px-0">
+      <ul className="flex min-w-max border-b">
+        {TABS.filter(({ action }) => can(roles, action)).map(({ tab, label }) => (
+          <li key={tab}>
+            <Link
+              href={`/events/${eventId}/${tab}`}
+              aria-current={tab === current ? 'page' : undefined}
+              className="target heading flex items-center border-b-4 border-transparent px-3 pt-1 text-lg aria-[current=page]:border-accent sm:px-5"
+            >
+              {label}
+            </Link>
+          </li>
+        ))}
+      </ul>
+    </nav>
+  )
+}

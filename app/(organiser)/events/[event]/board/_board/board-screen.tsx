@@ -1,0 +1,43 @@
+'use client'
+
+import { useState } from 'react'
+import { EmptyState } from '@/app/_ui/empty-state'
+import { EVERYTHING, filterRows } from '@/lib/board/filter-rows'
+import { useBoard } from '@/lib/board/use-board'
+import type { Board } from '@/lib/contracts/board'
+import { BoardFilterBar } from './board-filter-bar'
+import { BoardGroupList } from './board-group-list'
+import { ConnectionLine } from './connection-line'
+import { NeedsColumn } from './needs-column'
+
+/** The board: how every entry stands, by run group, and beside it who needs somebody. */
+export function BoardScreen({ eventId, first }: { readonly eventId: string; readonly first: Board }) {
+  const { board, connection } = useBoard(eventId, first)
+  const [filter, setFilter] = useState(EVERYTHING)
+  const rows = filterRows(board.rows, filter)
+  if (board.rows.length === 0)
+    return (
+      <EmptyState title="No entries yet">
+        When the organiser has imported the entry list, every car stands here with its verdict, sorted by number inside its run group.
+      </EmptyState>
+    )
+  return (
+    <div className="grid gap-x-8 gap-y-6 xl:grid-cols-[minmax(0,1fr)_400px]">
+      <div className="grid min-w-0 content-start gap-4 xl:col-span-2">
+        <ConnectionLine connection={connection} board={board} />
+        <BoardFilterBar filter={filter} onChange={setFilter} rows={board.rows} shown={rows.length} />
+      </div>
+      <NeedsColumn rows={rows} className="xl:order-last xl:self-start xl:sticky xl:top-4" />
+      <div className="grid min-w-0 content-start gap-8">
+        {board.groups.map((group) => (
+          <BoardGroupList key={group.id} group={group} rows={rows.filter((row) => row.group === group.id)} board={board} />
+        ))}
+        {rows.length === 0 && <p>No entry fits what you are looking for. Clear the search, or show all verdicts.</p>}
+        <p className="max-w-prose border-t pt-4 text-muted">
+          A verdict says what was seen today without dismantling, and by these checks alone. It is no certificate and no warranty; what
+          could not be seen is listed with the entry. Venue, national rules, road law and makers stand above it.
+        </p>
+      </div>
+    </div>
+  )
+}

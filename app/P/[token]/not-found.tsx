@@ -1,0 +1,1 @@
+export { default } from '@/app/(public)/p/[token]/not-found'
