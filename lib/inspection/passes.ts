@@ -150,5 +150,5 @@ function isEndedFor(answers: ReadonlySet<string>, fail: CheckLine, heads: CheckH
 function presentedOtherwise(answers: ReadonlySet<string>, { presented, anyPresented }: Killers): Presented['all'] {
   // A quarantined one counts here: were it adopted later, the pass it was answered by must not come back to life.
   const pinned = new Set(anyPresented.filter(({ hash }) => answers.has(hash)).map(pinsOf))
-  return presented.filter((entry) => !answers.has(entry.hash) && !pinned.has(pinsOf(entry)))
+  return presented.filter((entry) => !pinned.has(pinsOf(entry)))
 }

@@ -1,4 +1,5 @@
 import { outcomeOf, type CheckLine } from './check-line'
+import { replacedBy } from './edges'
 import type { CheckHeads } from './heads'
 import type { Presented } from './presented'
 
@@ -21,14 +22,15 @@ export function readRepairs(checks: Iterable<CheckHeads>, presented: Presented):
 }
 
 /**
- * Whether the line is a repair. *Put right here* disturbs the car whoever did it, so quarantine does not undo it; a ruling that
- * turns a fail into ok counts too, since the words "replaces a fail" leave it no way out.
+ * Whether the line is a repair. Whoever mended something disturbed the car, with the right to say ok or without: quarantine takes the ok and
+ * leaves the disturbance. A ruling that turns a fail into ok counts too, since the words "replaces a fail" leave it no way out.
  */
-export function isRepair(line: CheckLine, { edges }: CheckHeads): boolean {
+export function isRepair(line: CheckLine, { group, edges }: CheckHeads): boolean {
   const outcome = outcomeOf(line)
   if (line.record.kind === 'dispensation' || (outcome !== 'ok' && outcome !== 'advisory')) return false
   if (line.record.kind === 'finding' && line.record.found !== undefined) return true
-  return (edges.get(line) ?? []).some((target) => outcomeOf(target) === 'fail')
+  const targets = line.record.kind === 'finding' && !line.isFull ? replacedBy(line, group, () => true) : (edges.get(line) ?? [])
+  return targets.some((target) => outcomeOf(target) === 'fail')
 }
 
 /** A check's own repair is its own look: it does not reopen itself. */

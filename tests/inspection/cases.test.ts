@@ -3,13 +3,8 @@ import { foldEvent } from '@/lib/inspection/fold-event'
 import { foldSubject } from '@/lib/inspection/fold-subject'
 import type { SubjectState } from '@/lib/inspection/state'
 import { everyOrder } from '../support/every-order'
-import { CAR_KEY, context } from '../support/paddock'
+import { CAR_KEY, asText, context } from '../support/paddock'
 import { FOLD_CASES, type Expected } from './cases'
-
-/** A state as one text: equal texts, equal states, checks and passes in the same order. */
-function asText(state: SubjectState): string {
-  return JSON.stringify({ ...state, checks: [...state.checks] })
-}
 
 function look(state: SubjectState, expected: Expected): void {
   if (expected.verdict) expect(state.verdict).toBe(expected.verdict)

@@ -4,7 +4,7 @@ import { foldSubject } from '@/lib/inspection/fold-subject'
 import type { LogEntry } from '@/lib/inspection/log-entry'
 import { isKnown } from '@/lib/inspection/record'
 import type { FoldContext, SubjectState } from '@/lib/inspection/state'
-import { CAR_KEY, SUNDAY, context, finding, hold } from '../support/paddock'
+import { asText, CAR_KEY, SUNDAY, context, finding, hold } from '../support/paddock'
 import { randomFrom } from '../support/every-order'
 import { honestLog, PRESENTS_AGAIN, type Deed } from '../support/paddock-day'
 
@@ -44,18 +44,18 @@ function isPassing({ verdict }: SubjectState): boolean {
   return verdict === 'passed' || verdict === 'passed with advisories'
 }
 
-const settings = { numRuns: 300 } as const
+const settings = { numRuns: 200 } as const
+/** Generous: on a busy machine these take several seconds. */
+const patient = { timeout: 60_000 } as const
 
-describe('whatever the log', () => {
+describe('whatever the log', patient, () => {
   test('any order, and any record twice, gives the same state', () => {
     const shuffled = any.chain((log) =>
       fc.tuple(fc.constant(log), fc.shuffledSubarray([...log, ...log.slice(0, 3)], { minLength: log.length + Math.min(3, log.length) })),
     )
     fc.assert(
       fc.property(shuffled, ([log, other]) => {
-        const [one, two] = [fold(log), fold(other)]
-        expect(two).toEqual(one)
-        expect([...two.checks.keys()]).toEqual([...one.checks.keys()])
+        expect(asText(fold(other))).toBe(asText(fold(log)))
       }),
       settings,
     )
@@ -116,7 +116,7 @@ describe('whatever the log', () => {
   })
 })
 
-describe('with honest devices', () => {
+describe('with honest devices', patient, () => {
   test('[T1] taking a record’s permission away never makes a stopped car pass', () => {
     fc.assert(
       fc.property(deeds, (drawn) => {

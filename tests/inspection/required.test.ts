@@ -166,6 +166,15 @@ describe('[F10] repairs', () => {
   })
 })
 
+test('[F10] [T1] under a dispensation, an ok of somebody without the right still disturbs the car', () => {
+  const fail = finding('brakes.pads', 'fail')
+  const leave = dispensation('brakes.pads', null, { basis: [fail] })
+  const mended = finding('brakes.pads', 'ok', { basis: [leave, fail], quarantined: 'wrong-role' })
+  const records = [presented(), ...allOk({ except: ['brakes.pads'] }), fail, leave]
+  expect(fold(...records).verdict).toBe('passed with advisories')
+  expect(fold(...records, mended).open).toEqual(['wheels.nuts.front'])
+})
+
 describe('[F13] recalls and the wet', () => {
   const shown = presented({ facts: { cage: false, slicks: true } })
 

@@ -1,5 +1,6 @@
 import { describe, expect, test } from 'vitest'
 import { foldSubject } from '@/lib/inspection/fold-subject'
+import type { Book } from '@/lib/checklist/book'
 import type { LogEntry } from '@/lib/inspection/log-entry'
 import {
   CAR,
@@ -17,6 +18,7 @@ import {
   presented,
   unknownKind,
 } from '../support/paddock'
+import { paddockBook } from '../support/paddock-book'
 
 function verdict(records: readonly LogEntry[], declared = false) {
   return foldSubject(records, CAR_KEY, context({ declared: new Set(declared ? [CAR_KEY] : []) })).verdict
@@ -54,6 +56,10 @@ describe('[F6] the verdict', () => {
     const carried = allOk({ carriedFrom: 'c'.repeat(64) })
     expect(verdict([shown, ...carried], true)).toBe('declared only')
     expect(verdict([shown, ...carried])).toBe('in progress')
+    // The same where the list has nothing that perishes, so that everything it asks is carried.
+    const book = paddockBook() as Book
+    const openBook = () => ({ ...book, checks: book.checks.filter((check) => check.standing) })
+    expect(foldSubject([shown, ...carried], CAR_KEY, context({ openBook }))).toMatchObject({ open: [], verdict: 'in progress' })
   })
 
   test('[F6] an advisory that another head outranks or equals still shows in the verdict', () => {

@@ -1,7 +1,7 @@
 import type { Disposition, LogEntry, QuarantineCode } from '@/lib/inspection/log-entry'
 import { findingEffect } from '@/lib/inspection/finding-effect'
 import type { FindingOutcome, KnownRecord, RecallTrigger, RecordOf } from '@/lib/inspection/record'
-import type { FoldContext } from '@/lib/inspection/state'
+import type { FoldContext, SubjectState } from '@/lib/inspection/state'
 import { subjectKey, type Subject, type SubjectKey } from '@/lib/inspection/subject'
 import { PADDOCK_CHECKLIST, PADDOCK_LIMITS, paddockBook, paddockCheck } from './paddock-book'
 import { fakeHash, fakeId } from './paddock-hash'
@@ -230,3 +230,8 @@ export function context(given: Partial<FoldContext> = {}): FoldContext {
 export const CAR_KEY = subjectKey(CAR)
 export const PERSON_KEY = subjectKey(PERSON)
 export const FIT_KEY = subjectKey(FIT)
+
+/** A state as one text: equal texts are equal states, with checks and passes in the same order. */
+export function asText(state: SubjectState): string {
+  return JSON.stringify({ ...state, checks: [...state.checks] })
+}
