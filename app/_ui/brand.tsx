@@ -7,8 +7,8 @@ export function Brand() {
     <Link href="/" data-slot="brand" className="target inline-flex items-center gap-2 text-ink">
       <svg viewBox="-2 -14 76 28" className="h-7 w-[76px]" aria-hidden>
         <path
-          d={ropePath({ fromX: 26, toX: 46, y: 0, amplitude: 3.6, pitch: 10 })}
-          strokeWidth="3"
+          d={ropePath({ fromX: 26, toX: 46, y: 0, amplitude: 3.6, pitch: 13 })}
+          strokeWidth="2.6"
           strokeLinecap="round"
           className="fill-none stroke-wire"
         />

@@ -13,7 +13,7 @@ export function Choice({ type = 'checkbox', className, children, ...rest }: Choi
       data-slot="choice"
       className={classNames('target flex cursor-pointer items-center gap-3 py-1 has-disabled:text-muted', className)}
     >
-      <input type={type} className="size-7 shrink-0 accent-accent" {...rest} />
+      <input type={type} className="choice-mark" {...rest} />
       <span>{children}</span>
     </label>
   )

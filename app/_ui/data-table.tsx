@@ -28,7 +28,7 @@ export function DataTable({ caption, className, children, ...rest }: DataTablePr
 /** A head of a column, or of a row with `scope="row"`. */
 export function Th({ className, scope = 'col', ...rest }: ComponentProps<'th'>) {
   const look =
-    scope === 'row' ? 'border-b py-2 pr-4 font-bold' : 'border-b-[3px] bg-surface px-2 py-2 font-bold whitespace-nowrap first:pl-3'
+    scope === 'row' ? 'border-b py-2 align-top font-bold' : 'border-b-[3px] bg-surface px-2 py-2 font-bold whitespace-nowrap first:pl-3'
   return <th scope={scope} className={classNames(look, scope === 'row' && 'px-2 first:pl-3', className)} {...rest} />
 }
 

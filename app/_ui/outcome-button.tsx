@@ -28,7 +28,7 @@ export function OutcomeButton({ state, look = 'filled', className, children, typ
       data-state={state}
       type={type}
       className={classNames(
-        'target-outcome inline-flex items-center justify-center gap-3 rounded-sm border-[3px] px-3 py-2 text-left text-xl font-bold wrap-anywhere',
+        'target-outcome inline-flex items-center justify-center gap-x-3 gap-y-1.5 max-sm:flex-col max-sm:items-start rounded-sm border-[3px] px-3 py-2 text-left text-xl font-bold wrap-anywhere',
         'group disabled:cursor-not-allowed disabled:border-dashed disabled:border-muted disabled:bg-ground disabled:text-muted',
         isFilled ? FILLS[state] : 'border-line bg-ground text-ink active:bg-surface',
         className,

@@ -44,7 +44,13 @@ export function OutcomeMark({ state, tone = 'plain' }: Pick<OutcomeShapeProps, '
     case 'advisory':
       return (
         <>
-          <path d="M0-11.2 12 9.8H-12Z" className={inverse ? 'fill-advisory-ink' : 'fill-advisory'} />
+          {/* Amber on white is hardly seen: the outline is what makes the triangle. */}
+          <path
+            d="M0-10.2 11.2 9.2H-11.2Z"
+            strokeWidth="1.4"
+            strokeLinejoin="round"
+            className={inverse ? 'fill-advisory-ink stroke-advisory-ink' : 'fill-advisory stroke-advisory-ink'}
+          />
           <path d="M-1.7-4.6h3.4l-.5 7.4h-2.4zM-1.6 4.6h3.2v3.2h-3.2z" className={inverse ? 'fill-advisory' : 'fill-advisory-ink'} />
         </>
       )
@@ -53,7 +59,7 @@ export function OutcomeMark({ state, tone = 'plain' }: Pick<OutcomeShapeProps, '
     case 'held':
       return (
         <>
-          <circle r="9.9" fill="none" strokeWidth="4" className="stroke-advisory" />
+          <circle r="11.3" strokeWidth="1.2" className="fill-advisory stroke-advisory-ink" />
           <path d={HELD_HATCH} fill="none" strokeWidth="1.7" className="stroke-advisory-ink" />
           <StopSign radius={7.4} inverse={inverse} />
         </>
@@ -72,7 +78,7 @@ export function OutcomeMark({ state, tone = 'plain' }: Pick<OutcomeShapeProps, '
   }
 }
 
-const HELD_HATCH = ringHatchPath(8, 11.9, 3.6)
+const HELD_HATCH = ringHatchPath(8, 11.3, 3.6)
 
 function StopSign({ radius, inverse }: { readonly radius: number; readonly inverse: boolean }) {
   const half = radius * 0.62
@@ -84,26 +90,29 @@ function StopSign({ radius, inverse }: { readonly radius: number; readonly inver
   )
 }
 
-/** Half of it is known: the lower half is filled, and the mark's hook stands in the empty one. */
+/** Half of it is known: one half is filled, and the mark changes colour where it crosses. */
 function AskSign({ inverse }: { readonly inverse: boolean }) {
+  const [own, other] = inverse ? (['ask-ink', 'ask'] as const) : (['ask', 'ask-ink'] as const)
   return (
     <>
-      <path d="M0-11.4 11.4 0 0 11.4-11.4 0Z" className={inverse ? 'fill-ask' : 'fill-ground'} />
-      <path d="M-11.4 1.2-11.4 0h22.8v1.2L0 11.4Z" className={inverse ? 'fill-ask-ink' : 'fill-ask'} />
-      <path
-        d="M0-10 10 0 0 10-10 0Z"
-        fill="none"
-        strokeWidth="2"
-        strokeLinejoin="miter"
-        className={inverse ? 'stroke-ask-ink' : 'stroke-ask'}
-      />
-      <path
-        d="M-2.9-3.6a2.9 2.7 0 1 1 4.3 2.3q-1.4.8-1.4 2.4"
-        fill="none"
-        strokeWidth="2"
-        className={inverse ? 'stroke-ask-ink' : 'stroke-ask'}
-      />
-      <path d="M0 0v2.3M0 4v2.4" fill="none" strokeWidth="2.2" className={inverse ? 'stroke-ask' : 'stroke-ask-ink'} />
+      <path d="M0-10.6 10.6 0 0 10.6-10.6 0Z" strokeWidth="2" className={inverse ? 'fill-ask stroke-ask-ink' : 'fill-ground stroke-ask'} />
+      <path d="M0-12V12L-12 0Z" className={own === 'ask' ? 'fill-ask' : 'fill-ask-ink'} />
+      {/* A nested svg cuts at its edge: no clip path, so no id that two of them would share. */}
+      <svg x="-12" y="-12" width="12" height="24" viewBox="-12 -12 12 24">
+        <QuestionMark className={other === 'ask' ? 'fill-ask stroke-ask' : 'fill-ask-ink stroke-ask-ink'} />
+      </svg>
+      <svg x="0" y="-12" width="12" height="24" viewBox="0 -12 12 24">
+        <QuestionMark className={own === 'ask' ? 'fill-ask stroke-ask' : 'fill-ask-ink stroke-ask-ink'} />
+      </svg>
     </>
+  )
+}
+
+function QuestionMark({ className }: { readonly className: string }) {
+  return (
+    <g className={className}>
+      <path d="M-3.6-2.6a3.6 3.4 0 1 1 5.3 3C.4 1.2 0 1.9 0 3.2" strokeWidth="2.6" fill="none" fillOpacity="0" />
+      <rect x="-1.5" y="4.7" width="3" height="3" stroke="none" strokeOpacity="0" />
+    </g>
   )
 }

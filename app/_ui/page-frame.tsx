@@ -23,14 +23,14 @@ export function PageFrame({ title, subtitle, navigation, actions, width = 'wide'
         Skip to the content
       </a>
       <header className="border-b py-3">{navigation}</header>
-      <div className="flex flex-wrap items-end justify-between gap-4 pt-6 pb-4">
-        <div>
-          <h1 className="text-3xl">{title}</h1>
-          {subtitle !== undefined && <p className="mt-1 text-muted">{subtitle}</p>}
-        </div>
-        {actions !== undefined && <div className="flex flex-wrap gap-3">{actions}</div>}
-      </div>
       <main id="content" className="grow">
+        <div className="flex flex-wrap items-end justify-between gap-4 pt-6 pb-4">
+          <div>
+            <h1 className="text-3xl">{title}</h1>
+            {subtitle !== undefined && <p className="mt-1 text-muted">{subtitle}</p>}
+          </div>
+          {actions !== undefined && <div className="flex flex-wrap gap-3">{actions}</div>}
+        </div>
         {children}
       </main>
     </div>

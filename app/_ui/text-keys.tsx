@@ -26,6 +26,8 @@ export const CODE_KEYS: readonly string[] = [...'0123456789ABCDEFGHJKMNPQRSTVWXY
 /** Keys for a short code, for gloves; a keyboard types into the same value. */
 export function TextKeys({ label, value, onChange, keys, maxLength, description, judgement }: TextKeysProps) {
   const id = useId()
+  // Ten keys or fewer stand as on a number pad.
+  const isPad = keys.length <= 10
   const take = (text: string) =>
     onChange(
       [...text.toUpperCase()]
@@ -57,13 +59,13 @@ export function TextKeys({ label, value, onChange, keys, maxLength, description,
       <p id={`${id}-means`} aria-live="polite" className="min-h-6 font-bold">
         {judgement}
       </p>
-      <div className="grid grid-cols-[repeat(auto-fill,minmax(56px,1fr))] gap-2">
+      <div className={isPad ? 'grid grid-cols-3 gap-2' : 'grid grid-cols-[repeat(auto-fill,minmax(56px,1fr))] gap-2'}>
         {keys.map((key) => (
           <Key key={key} onPress={() => take(value + key)}>
             {key}
           </Key>
         ))}
-        <Key onPress={() => onChange(value.slice(0, -1))} name="Take back the last character">
+        <Key onPress={() => onChange(value.slice(0, -1))} name="Take back the last character" className={isPad ? 'col-span-2' : ''}>
           ⌫
         </Key>
       </div>

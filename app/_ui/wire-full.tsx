@@ -1,3 +1,6 @@
+'use client'
+
+import { useState } from 'react'
 import { classNames } from './class-names'
 import { OutcomeMark } from './outcome-shape'
 import { frayPath, hexagonPoints, ropePath } from './wire-geometry'
@@ -8,7 +11,7 @@ const WIDTH = 88
 const HEIGHT = 52
 const RADIUS = 23
 const EDGE = WIDTH / 2
-const LAY = { y: 0, amplitude: 3.6, pitch: 12 }
+const LAY = { y: 0, amplitude: 3.4, pitch: 13 }
 
 /** Bolts in rows that fold to the width they have; the wire runs on from the end of a row to the start of the next. */
 export function WireFull({ bolts, sentence, onSelect, current }: Omit<WireProps, 'scale'>) {
@@ -88,13 +91,19 @@ const WORDS: Readonly<Record<WireBolt['state'], string>> = {
   held: 'held',
 }
 
-/** Half a link: from the head's point to the cell's edge, where the neighbour's half begins. */
+/** Half a link: threads through (once, when it closes under the person's eyes, never on load). From the head's point to the cell's edge, where the neighbour's half begins. */
 function WireEnd({ link, side }: { readonly link: WireLink; readonly side: 1 | -1 }) {
-  const inner = RADIUS - 5
+  const [atFirst] = useState(link)
+  const inner = RADIUS - 8
   if (link === 'whole') {
     const [fromX, toX] = side === 1 ? [inner, EDGE] : [-EDGE, -inner]
     return (
-      <path d={ropePath({ ...LAY, fromX, toX })} className="wire-threads fill-none stroke-wire" strokeWidth="2.9" strokeLinecap="round" />
+      <path
+        d={ropePath({ ...LAY, fromX, toX })}
+        className={classNames('fill-none stroke-wire', atFirst !== 'whole' && (side === 1 ? 'wire-threads-out' : 'wire-threads-in'))}
+        strokeWidth="2.6"
+        strokeLinecap="round"
+      />
     )
   }
   const hangsHere = (link === 'cut-after' && side === 1) || (link === 'cut-before' && side === -1)

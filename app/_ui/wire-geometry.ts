@@ -29,8 +29,9 @@ export function ropePath({ fromX, toX, y, amplitude, pitch }: Rope): string {
   const width = length / count
   return Array.from({ length: count }, (_, index) => {
     const x = fromX + index * width
-    const reach = width * 0.9
-    return `M${round(x)} ${round(y - amplitude)}c${round(reach * 0.6)} 0 ${round(reach * 0.4)} ${round(amplitude * 2)} ${round(reach)} ${round(amplitude * 2)}`
+    // Each front runs on under the next but one: that is what makes a twist of it and not a spring.
+    const reach = width * 1.7
+    return `M${round(x)} ${round(y - amplitude)}c${round(reach * 0.555)} 0 ${round(reach * 0.55)} ${round(amplitude * 2)} ${round(reach)} ${round(amplitude * 2)}`
   }).join('')
 }
 

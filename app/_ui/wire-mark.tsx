@@ -2,7 +2,7 @@ import { OutcomeMark, type OutcomeState } from './outcome-shape'
 import { frayPath, hexagonPoints, ropePath } from './wire-geometry'
 import { isBroken, isClosed, type WireBolt } from './wire-links'
 
-const LAY = { y: 0, amplitude: 2.6, pitch: 8.5 }
+const LAY = { y: 0, amplitude: 2.4, pitch: 10 }
 const LEFT = 10
 const RIGHT = 62
 
@@ -23,7 +23,7 @@ export function WireMark({ bolts, sentence }: { readonly bolts: readonly WireBol
         <path
           d={wirePath(worst, asked.length === 0 ? 0 : closed / asked.length)}
           className="fill-none stroke-wire"
-          strokeWidth="2.2"
+          strokeWidth="2"
           strokeLinecap="round"
         />
         <polygon
@@ -55,11 +55,11 @@ function Worst({ state }: { readonly state: OutcomeState }) {
 function wirePath(worst: OutcomeState, share: number): string {
   const [from, to] = [LEFT + 8, RIGHT - 8]
   if (isBroken(worst)) {
-    const ends = [from + 9, to - 7] as const
+    const ends = [from + 8, to - 6] as const
     return (
       ropePath({ ...LAY, fromX: from, toX: ends[0] }) +
-      frayPath({ x: ends[0], y: 0, amplitude: 2, direction: 1, length: 8 }) +
-      frayPath({ x: ends[1] + 6, y: 0, amplitude: 2, direction: -1, length: 8 })
+      frayPath({ x: ends[0], y: 0, amplitude: 2, direction: 1, length: 7 }) +
+      frayPath({ x: ends[1] + 2, y: 0, amplitude: 2, direction: -1, length: 7 })
     )
   }
   if (isClosed(worst)) return ropePath({ ...LAY, fromX: from, toX: to })

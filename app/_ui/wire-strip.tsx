@@ -4,7 +4,7 @@ import { type WireBolt, wireLinks } from './wire-links'
 
 const STEP = 22
 const HEIGHT = 20
-const LAY = { y: 0, amplitude: 2.1, pitch: 7 }
+const LAY = { y: 0, amplitude: 1.9, pitch: 8 }
 const SHAPED = 8
 
 /** One row: closed runs are plain wire with a small head where a bolt sits; only what is open, failed or noted has a shape. */
@@ -22,7 +22,7 @@ export function WireStrip({ bolts, sentence }: { readonly bolts: readonly WireBo
       height={HEIGHT}
       className="h-auto max-w-full"
     >
-      <path d={wirePath(links)} className="fill-none stroke-wire" strokeWidth="1.9" strokeLinecap="round" />
+      <path d={wirePath(links)} className="fill-none stroke-wire" strokeWidth="1.7" strokeLinecap="round" />
       {bolts.map((bolt, index) => (
         <g key={index} transform={`translate(${index * STEP + STEP / 2} 0)`}>
           <StripBolt state={bolt.state} />

@@ -1,6 +1,7 @@
 import type { Metadata } from 'next'
 import { Brand } from '@/app/_ui/brand'
 import { PageFrame } from '@/app/_ui/page-frame'
+import { GloveSwitch } from '@/app/_ui/glove-switch'
 import { ThemeSwitch } from '@/app/_ui/theme-switch'
 import { ButtonsSample } from './buttons-sample'
 import { EntrySample } from './entry-sample'
@@ -17,7 +18,12 @@ export default function DesignPage() {
     <PageFrame
       title="Design"
       subtitle="Every primitive in every state. What you see here is invented."
-      actions={<ThemeSwitch />}
+      actions={
+        <>
+          <GloveSwitch />
+          <ThemeSwitch />
+        </>
+      }
       navigation={<Brand />}
     >
       <div className="grid gap-12">

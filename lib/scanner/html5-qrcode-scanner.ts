@@ -8,6 +8,7 @@ import { seenLately } from './seen-lately'
 const QUIET_MS = 2000
 /** A pause after each scan, not a rate: 30 leaves the least of it. */
 const FPS = 30
+const PLAYS_WITHIN_MS = 8000
 
 /** The camera as a reader of codes. The library is loaded on the first call and nowhere else. */
 export const startScanner: StartScanner = (host, onText, onProblem, onReady) => {
@@ -31,7 +32,7 @@ export const startScanner: StartScanner = (host, onText, onProblem, onReady) => 
   return async () => {
     isOver = true
     const scanner = await running
-    if (scanner !== null) await scanner.stop()
+    if (scanner !== null) await close(scanner, reader)
     reader.remove()
   }
 }
@@ -50,24 +51,39 @@ async function open(reader: ReaderElement, take: (text: string) => void): Promis
     useBarCodeDetectorIfSupported: true,
   })
   dropSlowDecoder(scanner)
-  await start(scanner, take)
+  await start(scanner, reader, take)
   const width = reader.element.querySelector('video')?.videoWidth ?? 0
   if (width > 0 && Math.abs(width - reader.element.offsetWidth) > 16) {
     // The camera gave another picture than asked for: once more, as wide as that.
-    await scanner.stop()
+    await close(scanner, reader)
     reader.setWidth(width)
-    await start(scanner, take)
+    await start(scanner, reader, take)
   }
   return scanner
 }
 
-async function start(scanner: Html5Qrcode, take: (text: string) => void): Promise<void> {
+async function start(scanner: Html5Qrcode, reader: ReaderElement, take: (text: string) => void): Promise<void> {
   const videoConstraints = { facingMode: { ideal: 'environment' }, width: { ideal: 1280 }, height: { ideal: 720 } }
   const qrbox = (width: number, height: number) => {
     const side = Math.max(50, Math.round((Math.min(width, height) * 2) / 3))
     return { width: side, height: side }
   }
   await scanner.start({ facingMode: 'environment' }, { fps: FPS, disableFlip: true, qrbox, videoConstraints }, take, undefined)
+  // It says it has started before the picture plays; stopped in between it would throw and leave the camera on.
+  for (let waited = 0; !scanner.isScanning && waited < PLAYS_WITHIN_MS; waited += 20) await new Promise((next) => setTimeout(next, 20))
+  if (scanner.isScanning) return
+  await close(scanner, reader)
+  throw new Error('The camera was opened, but gave no picture.')
+}
+
+/** Frees the camera, whatever state it is in. */
+async function close(scanner: Html5Qrcode, { element }: ReaderElement): Promise<void> {
+  const stream = element.querySelector('video')?.srcObject
+  try {
+    if (scanner.isScanning) await scanner.stop()
+  } finally {
+    if (stream instanceof MediaStream) for (const track of stream.getTracks()) track.stop()
+  }
 }
 
 async function loadDecoder(): Promise<void> {
