@@ -14,7 +14,11 @@ export function SignOut() {
     setBusy(true)
     const ended = await call(signOut, { body: {} })
     // Somebody whose sign-in was over already is out all the same.
-    if (ended.ok || ended.problem.code === 'not-signed-in') return window.location.assign('/sign-in')
+    if (ended.ok || ended.problem.code === 'not-signed-in') {
+      // eslint-disable-next-line @next/next/no-location-assign-relative-destination -- a whole page: nothing of this person may stay in memory
+      window.location.assign('/sign-in')
+      return
+    }
     setFailed(`Still signed in: ${ended.problem.what} ${ended.problem.todo}`)
     setBusy(false)
   }

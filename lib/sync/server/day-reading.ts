@@ -1,16 +1,15 @@
 import 'server-only'
 import type { Db } from '@/db/client'
 import type { Book } from '@/lib/checklist/book'
-import { readDay, type DayLog } from '@/lib/inspection/day-log'
-import { foldLog } from '@/lib/inspection/fold-subject'
 import type { LogEntry } from '@/lib/inspection/log-entry'
 import { isKnown } from '@/lib/inspection/record'
-import { readOwn } from '@/lib/inspection/read-log'
 import type { FoldContext, SubjectState } from '@/lib/inspection/state'
 import { subjectKey, type SubjectKey } from '@/lib/inspection/subject'
+import { assert } from '@/lib/platform/assert'
 import { entryNow, type ChangeableEntry } from '../core/entry-now'
 import { eventFrame, foldContext, type EventFrame } from './event-frame'
 import { eventLog, type EventLog } from './event-log'
+import { eventStates } from './event-states'
 import { pinnedBook } from './pinned-books'
 
 /** An event's log read at one moment, for screens: every subject folded for the venue's day. */
@@ -26,22 +25,9 @@ export interface DayReading {
   readonly bookOf: (checklistHash: string, limitsHash: string) => Book | null
 }
 
-interface Folded {
-  readonly entries: readonly LogEntry[]
-  readonly length: number
-  readonly state: SubjectState
-}
-
-interface Kept {
-  /** What every subject's state hangs on besides its own records. */
-  readonly tag: string
-  readonly folded: Map<SubjectKey, Folded>
-}
-
-const holder = globalThis as typeof globalThis & { lockwireReadings?: WeakMap<object, Map<string, Kept>> }
 const NONE: readonly LogEntry[] = []
 
-/** Reads an event's log; null where there is no such event. A subject is folded again only when it has a new record or the day has changed. */
+/** Reads an event's log; null where there is no such event. Subjects are folded when asked for, and again only when something of them changed. */
 export function dayReading(database: Db, eventId: string, now: number): DayReading | null {
   const read = database.$client.transaction(() => {
     const frame = eventFrame(database, eventId)
@@ -50,32 +36,19 @@ export function dayReading(database: Db, eventId: string, now: number): DayReadi
   if (read === null) return null
   const { frame, log } = read
   const context = foldContext(database, frame, now)
-  const folded = keptFor(database, eventId, tagOf(frame, log, context)).folded
-  let day: DayLog | null = null
-  const ofEvent = () => (day ??= readDay(log.bySubject.get(subjectKey({ event: eventId })) ?? NONE))
   return {
     seq: log.seq,
     day: context.day,
-    stateOf: (key) => stateOf(key, log, folded, ofEvent, context),
+    stateOf: (key) => stateOf(key, frame, log, context),
     setAsideOf: (key) => setAsideIn(log.bySubject.get(key) ?? NONE),
     entryNow: (entryId) => entryAsRecorded(entryId, frame, log),
     bookOf: (checklistHash, limitsHash) => pinnedBook(database, checklistHash, limitsHash),
   }
 }
 
-function stateOf(
-  key: SubjectKey,
-  log: EventLog,
-  folded: Map<SubjectKey, Folded>,
-  ofEvent: () => DayLog,
-  context: FoldContext,
-): SubjectState {
-  const entries = log.bySubject.get(key) ?? NONE
-  const known = folded.get(key)
-  // The same growing list as before, no longer than before; one read anew after a restore is another list.
-  if (known !== undefined && known.entries === entries && known.length === entries.length) return known.state
-  const state = foldLog(readOwn(entries, key), ofEvent(), context)
-  folded.set(key, { entries, length: entries.length, state })
+function stateOf(key: SubjectKey, frame: EventFrame, log: EventLog, context: FoldContext): SubjectState {
+  const state = eventStates(frame, log, [key], context).get(key)
+  assert(state !== undefined, `asked how ${key} stands, which is no subject that is judged`)
   return state
 }
 
@@ -96,19 +69,4 @@ function entryAsRecorded(entryId: string, frame: EventFrame, log: EventLog): Cha
     entry,
     records.map(({ record, disposition }) => ({ record, quarantined: disposition.state === 'quarantined' })),
   )
-}
-
-function tagOf(frame: EventFrame, log: EventLog, { day }: FoldContext): string {
-  return `${day} ${frame.event.snapshotVersion} ${log.eventVersion}`
-}
-
-function keptFor(database: Db, eventId: string, tag: string): Kept {
-  holder.lockwireReadings ??= new WeakMap()
-  const readings = holder.lockwireReadings.get(database.$client) ?? new Map<string, Kept>()
-  holder.lockwireReadings.set(database.$client, readings)
-  const known = readings.get(eventId)
-  if (known?.tag === tag) return known
-  const kept = { tag, folded: new Map<SubjectKey, Folded>() }
-  readings.set(eventId, kept)
-  return kept
 }

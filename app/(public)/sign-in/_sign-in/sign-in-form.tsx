@@ -20,7 +20,10 @@ export function SignInForm({ next }: { readonly next: string | null }) {
   const send = form.handleSubmit(async (body) => {
     setProblem(null)
     const answer = await call(signIn, { body })
-    if (!answer.ok) return setProblem(answer.problem)
+    if (!answer.ok) {
+      setProblem(answer.problem)
+      return
+    }
     setLeaving(true)
     // A whole page, not a soft one: nothing that was rendered for nobody may stay in memory. The server leads on by role.
     window.location.assign(next ?? '/sign-in')

@@ -29,11 +29,15 @@ export function JoinForm({ token, code: { event, role }, onAsked, onCodeGone }: 
 
   const send = form.handleSubmit(async (body) => {
     setProblem(null)
-    if (!canKeep()) return setProblem(KEEPS_NOTHING)
+    if (!canKeep()) {
+      setProblem(KEEPS_NOTHING)
+      return
+    }
     const asked = await call(join, { params: { token }, body })
     if (asked.ok) {
       const { claim, role: given, event: at } = asked.value
-      return onAsked({ claim, event: at.id, role: given, name: body.name, title: `${at.name}, ${dayWords(at.firstDay)}` })
+      onAsked({ claim, event: at.id, role: given, name: body.name, title: `${at.name}, ${dayWords(at.firstDay)}` })
+      return
     }
     setProblem(asked.problem)
     if (asked.problem.code === 'join-code-expired') onCodeGone()

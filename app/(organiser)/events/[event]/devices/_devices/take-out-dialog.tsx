@@ -1,6 +1,6 @@
 'use client'
 
-import { type FormEvent, useState } from 'react'
+import { type SubmitEvent, useState } from 'react'
 import { Button } from '@/app/_ui/button'
 import { Dialog } from '@/app/_ui/dialog'
 import { TextField } from '@/app/_ui/field'
@@ -45,10 +45,11 @@ export function TakeOutDialog({ eventId, asked, onClose, onDone }: TakeOutDialog
   const [problem, setProblem] = useState<Problem | null>(null)
   const [busy, setBusy] = useState(false)
 
-  async function send(event: FormEvent): Promise<void> {
+  async function send(event: SubmitEvent): Promise<void> {
     event.preventDefault()
-    if (typed.trim() !== String(device.kid)) return setError(`Type ${device.kid}, the number of this device.`)
-    setError(undefined)
+    const isRight = typed.trim() === String(device.kid)
+    setError(isRight ? undefined : `Type ${device.kid}, the number of this device.`)
+    if (!isRight) return
     setBusy(true)
     const done = await call(retireDevice, { params: { event: eventId }, body: { device: device.id, as } })
     setBusy(false)

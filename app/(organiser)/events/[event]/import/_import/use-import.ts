@@ -39,8 +39,8 @@ export function useImport(eventId: string) {
     const mine = ++asked.current
     const read = await readList(file)
     if (asked.current !== mine) return
-    if ('why' in read) return setStage({ at: 'unreadable', ...read })
-    await look(read)
+    if ('why' in read) setStage({ at: 'unreadable', ...read })
+    else await look(read)
   }
 
   async function look(list: ChosenList): Promise<void> {
