@@ -1,6 +1,6 @@
 'use client'
 
-import type { ReactNode } from 'react'
+import { useState, type ReactNode } from 'react'
 import { Notice } from '@/app/_ui/notice'
 import { Button } from '@/app/_ui/button'
 import { useDayStatus } from '@/lib/sync/client/use-day'
@@ -41,11 +41,13 @@ export function CrewGate({ post, children }: CrewGateProps) {
 
 function Opened({ client, children }: { readonly client: DayClient; readonly children: ReactNode }) {
   const status = useDayStatus(client)
+  // A day loaded before needs no new word of confirmation: a reload must not stand between a glove and its check.
+  const [isReady, setReady] = useState(status.loaded)
   return (
     // A tap anywhere says that somebody is still there.
     <div className="mx-auto flex min-h-dvh w-full max-w-3xl flex-col" onPointerDown={client.touched}>
       <StatusStrip />
-      {status.unlocked === null ? <UnlockScreen /> : !status.loaded ? <LoadScreen /> : children}
+      {status.unlocked === null ? <UnlockScreen /> : isReady ? children : <LoadScreen onReady={() => setReady(true)} />}
     </div>
   )
 }

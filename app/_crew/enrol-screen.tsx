@@ -40,7 +40,7 @@ export function EnrolScreen({ post }: { readonly post: 'bay' | 'pit-exit' }) {
     const request = { event: chance.event, name: name.trim(), ...(chance.claim === null ? {} : { claim: chance.claim }) }
     const outcome = await enrolHere(request, browserStores, Date.now())
     setBusy(false)
-    if (!outcome.ok) return setProblem(outcome.problem)
+    if (!outcome.ok) { setProblem(outcome.problem); return; }
     // A fresh page opens the device's own store from the start.
     window.location.reload()
   }

@@ -18,29 +18,27 @@ const keyOf = (subject: string) => `lockwire.walk.${subject}`
 
 /** Remembers where the walk of a subject stands. Only a convenience: nothing recorded depends on it, so a full store is no harm. */
 export function rememberWalk(store: TextStore, subject: string, left: LeftAt): void {
-  try {
-    store.setItem(keyOf(subject), JSON.stringify(left))
-  } catch {
-    // Without room the walk opens at its first hole instead.
-  }
+  // Without room the walk opens at its first hole instead.
+  attempt(() => store.setItem(keyOf(subject), JSON.stringify(left)), undefined)
 }
 
 /** Where the walk of a subject was left; null when it never was, or the memory cannot be read. */
 export function recallWalk(store: TextStore, subject: string): LeftAt | null {
-  try {
-    const left: unknown = JSON.parse(store.getItem(keyOf(subject)) ?? 'null')
-    return isLeftAt(left) ? left : null
-  } catch {
-    return null
-  }
+  const left = attempt<unknown>(() => JSON.parse(store.getItem(keyOf(subject)) ?? 'null'), null)
+  return isLeftAt(left) ? left : null
 }
 
 /** Forgets it, when the walk is done. */
 export function forgetWalk(store: TextStore, subject: string): void {
+  attempt(() => store.removeItem(keyOf(subject)), undefined)
+}
+
+/** Does it, or gives `otherwise` where the store is full, closed to us, or holds what is no JSON. */
+function attempt<T>(work: () => T, otherwise: T): T {
   try {
-    store.removeItem(keyOf(subject))
+    return work()
   } catch {
-    // Nothing to forget where nothing can be kept.
+    return otherwise
   }
 }
 

@@ -2,11 +2,11 @@
 
 import { useState } from 'react'
 import { useDay } from '@/app/_crew/day-context'
+import { ProblemNotice } from '@/app/_crew/problem-notice'
+import { useAction } from '@/app/_crew/use-action'
 import { Button } from '@/app/_ui/button'
-import { Notice } from '@/app/_ui/notice'
 import { OutcomeShape } from '@/app/_ui/outcome-shape'
 import { can } from '@/lib/permissions/policy'
-import { dayProblemOf, type DayProblem } from '@/lib/sync/client/day-problem'
 import { useDayStatus } from '@/lib/sync/client/use-day'
 import type { Walk } from './use-walk'
 
@@ -15,8 +15,7 @@ export function BandPanel({ walk }: { readonly walk: Walk }) {
   const day = useDay()
   const { unlocked } = useDayStatus(day)
   const [number, setNumber] = useState('')
-  const [busy, setBusy] = useState(false)
-  const [problem, setProblem] = useState<DayProblem | null>(null)
+  const { busy, problem, act } = useAction()
   const person = 'person' in walk.subject ? walk.subject.person : null
   if (person === null) return null
   const band = walk.state.passes.findLast(
@@ -24,18 +23,10 @@ export function BandPanel({ walk }: { readonly walk: Walk }) {
   )
 
   const issue = async () => {
-    setBusy(true)
-    try {
+    await act(async () => {
       await day.issueBand({ person, bandNumber: number.trim().toUpperCase() })
       setNumber('')
-      setProblem(null)
-    } catch (error) {
-      const known = dayProblemOf(error)
-      if (!known) throw error
-      setProblem(known)
-    } finally {
-      setBusy(false)
-    }
+    })
   }
 
   if (!can(unlocked?.roles ?? [], 'record:band')) return <p>Ready for a band. A scrutineer or sign-on puts it on.</p>
@@ -46,7 +37,7 @@ export function BandPanel({ walk }: { readonly walk: Walk }) {
           <OutcomeShape state="ok" className="size-8" /> Band {band.record.bandNumber}
         </p>
       )}
-      {problem && <Notice happened={problem.what} kept={problem.kept} todo={problem.todo} />}
+      <ProblemNotice problem={problem} />
       <form
         className="grid gap-2"
         onSubmit={(event) => {

@@ -2,13 +2,13 @@
 
 import { useState } from 'react'
 import { useDay } from '@/app/_crew/day-context'
+import { ProblemNotice } from '@/app/_crew/problem-notice'
+import { useAction } from '@/app/_crew/use-action'
 import { clockTime } from '@/app/_crew/say-when'
 import { Button } from '@/app/_ui/button'
-import { Notice } from '@/app/_ui/notice'
 import { OutcomeShape } from '@/app/_ui/outcome-shape'
 import { blocksOf } from '@/lib/pass/build-pass-list'
 import { can } from '@/lib/permissions/policy'
-import { dayProblemOf, type DayProblem } from '@/lib/sync/client/day-problem'
 import { useDayStatus } from '@/lib/sync/client/use-day'
 import type { Walk } from './use-walk'
 
@@ -17,7 +17,7 @@ export function BlockList({ walk }: { readonly walk: Walk }) {
   const day = useDay()
   const { unlocked } = useDayStatus(day)
   const [why, setWhy] = useState('')
-  const [problem, setProblem] = useState<DayProblem | null>(null)
+  const { problem, act } = useAction()
   const { blocks } = walk.state
   if (blocks.length === 0) return null
   const listed = blocksOf(walk.state, walk.book).filter(({ kind }) => kind !== 'fail')
@@ -25,14 +25,9 @@ export function BlockList({ walk }: { readonly walk: Walk }) {
   const mayLift = can(unlocked?.roles ?? [], 'record:lifted') && holds.length > 0
 
   const lift = async () => {
-    try {
+    await act(async () => {
       await day.record([{ kind: 'lifted', subject: walk.subject, holds: holds.map(({ hash }) => hash), why: why.trim() }])
-      setProblem(null)
-    } catch (error) {
-      const known = dayProblemOf(error)
-      if (!known) throw error
-      setProblem(known)
-    }
+    })
   }
 
   return (
@@ -74,7 +69,7 @@ export function BlockList({ walk }: { readonly walk: Walk }) {
           </Button>
         </form>
       )}
-      {problem && <Notice happened={problem.what} kept={problem.kept} todo={problem.todo} className="mt-3" />}
+      <ProblemNotice problem={problem} className="mt-3" />
     </section>
   )
 }

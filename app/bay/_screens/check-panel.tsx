@@ -40,18 +40,22 @@ export function CheckPanel({ item, facts, lastDay, typed, onTyped, onAnswer, bus
   const give = (reason: ReasonGiven) => {
     setAsking(null)
     if (asking === null) return
-    if (asking.for !== 'put-right') return onAnswer({ say: asking.for, values: read.values, reason: reason.id }, reason.note)
+    if (asking.for !== 'put-right') {
+      onAnswer({ say: asking.for, values: read.values, reason: reason.id }, reason.note)
+      return
+    }
     const mended: Answer & { say: 'put-right' } = { say: 'put-right', found: { values: read.values, reason: reason.id }, values: {} }
-    if (!check.rule) return onAnswer(mended, reason.note)
-    // What was measured is the state met; the state left is measured anew.
-    setFound({ values: mended, note: reason.note })
-    onTyped({})
+    if (check.rule) {
+      // What was measured is the state met; the state left is measured anew.
+      setFound({ values: mended, note: reason.note })
+      onTyped({})
+    } else onAnswer(mended, reason.note)
   }
 
   const answerGood = (say: 'ok' | 'advisory') => {
-    if (found) return onAnswer({ ...found.values, values: read.values }, found.note)
-    if (say === 'ok') return onAnswer({ say, values: read.values }, '')
-    setAsking({ for: 'advisory' })
+    if (found) onAnswer({ ...found.values, values: read.values }, found.note)
+    else if (say === 'ok') onAnswer({ say, values: read.values }, '')
+    else setAsking({ for: 'advisory' })
   }
 
   return (

@@ -2,7 +2,7 @@
 
 import { useState } from 'react'
 import { Button } from '@/app/_ui/button'
-import { doesNotApply } from '@/lib/checklist/applicable-checks'
+import { evaluateCondition } from '@/lib/checklist/condition'
 import type { Book } from '@/lib/checklist/book'
 import type { CarFacts } from '@/lib/checklist/car-facts'
 import { DEPTHS, type Depth } from '@/lib/checklist/checklist'
@@ -27,7 +27,7 @@ const DEPTH_WORDS: Readonly<Record<Depth, string>> = {
 export function FactsForm({ book, kind, known, depth: depthBefore, busy, onPresent }: FactsFormProps) {
   const [facts, setFacts] = useState<CarFacts>(known)
   const [depth, setDepth] = useState<Depth>(depthBefore)
-  const asked = book.checklist.facts.filter((fact) => fact.subject === kind && !doesNotApply(fact, facts))
+  const asked = book.checklist.facts.filter((fact) => fact.subject === kind && isAskedNow(fact, facts))
   const unknown = asked.filter((fact) => facts[fact.name] === undefined)
   return (
     <form
@@ -67,6 +67,11 @@ export function FactsForm({ book, kind, known, depth: depthBefore, busy, onPrese
       </Button>
     </form>
   )
+}
+
+/** Asked only once what it hangs on has been said: nobody is asked about a harness before the belts are known. */
+function isAskedNow(fact: Book['checklist']['facts'][number], facts: CarFacts): boolean {
+  return fact.applies === undefined || evaluateCondition(fact.applies, facts) === true
 }
 
 interface ChoiceProps<T> {

@@ -28,7 +28,7 @@ export function FindCar() {
         ? begun(entries, (id) => day.state(`car:${id}`).verdict)
         : search(entries, query, passEntry(day.passList(), query)),
     // `version` stands for all that the day's states are made of.
-    // eslint-disable-next-line react-hooks/exhaustive-deps -- see above
+    // eslint-disable-next-line react-hooks/exhaustive-deps -- the dependency stands in another form, as the line above says
     [entries, query, version],
   )
   return (

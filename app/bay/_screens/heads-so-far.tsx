@@ -11,7 +11,7 @@ const SHAPES = { ok: 'ok', advisory: 'advisory', fail: 'fail', 'could-not-see': 
 const WORDS = { ok: 'ok', advisory: 'advisory', fail: 'fail', 'could-not-see': 'could not see', unseen: 'taken back' } as const
 
 /** What has been said of this check already: who, when, on what grounds. Two who differ are both shown. */
-export function HeadsSoFar({ item }: { readonly item: WalkItem; readonly subject: string }) {
+export function HeadsSoFar({ item }: { readonly item: WalkItem }) {
   const day = useDay()
   const snapshot = day.snapshot()
   const heads = item.state?.heads ?? []

@@ -1,13 +1,12 @@
 'use client'
 
-import { useState } from 'react'
 import { useDay } from '@/app/_crew/day-context'
+import { ProblemNotice } from '@/app/_crew/problem-notice'
+import { useAction } from '@/app/_crew/use-action'
 import { Button } from '@/app/_ui/button'
-import { Notice } from '@/app/_ui/notice'
 import { qrText } from '@/lib/pass/qr-text'
 import { showTypedCode, typedCode } from '@/lib/pass/typed-code'
 import { can } from '@/lib/permissions/policy'
-import { dayProblemOf, type DayProblem } from '@/lib/sync/client/day-problem'
 import { useDayStatus } from '@/lib/sync/client/use-day'
 import { PassLabel } from './pass-label'
 import type { Walk } from './use-walk'
@@ -16,8 +15,7 @@ import type { Walk } from './use-walk'
 export function PassPanel({ walk }: { readonly walk: Walk }) {
   const day = useDay()
   const { unlocked } = useDayStatus(day)
-  const [busy, setBusy] = useState(false)
-  const [problem, setProblem] = useState<DayProblem | null>(null)
+  const { busy, problem, act } = useAction()
   const entry = 'car' in walk.subject ? day.entry(walk.subject.car) : null
   const event = day.snapshot()?.event
   if (!entry || !event) return null
@@ -28,22 +26,14 @@ export function PassPanel({ walk }: { readonly walk: Walk }) {
   const mayIssue = can(unlocked?.roles ?? [], 'record:pass')
 
   const issue = async () => {
-    setBusy(true)
-    try {
+    await act(async () => {
       await day.issuePass({ entry: entry.id, passengerSeatUsable: walk.facts?.passengerSeat === 'used' })
-      setProblem(null)
-    } catch (error) {
-      const known = dayProblemOf(error)
-      if (!known) throw error
-      setProblem(known)
-    } finally {
-      setBusy(false)
-    }
+    })
   }
 
   return (
     <section className="grid gap-3" aria-label="Pass">
-      {problem && <Notice happened={problem.what} kept={problem.kept} todo={problem.todo} />}
+      <ProblemNotice problem={problem} />
       {!pass && !mayIssue && <p>Ready for its pass. A scrutineer issues it.</p>}
       {!pass && mayIssue && (
         <Button size="large" isBusy={busy} onClick={() => void issue()}>

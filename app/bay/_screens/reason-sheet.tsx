@@ -23,8 +23,8 @@ export function ReasonSheet({ check, title, onReason, onClose }: ReasonSheetProp
   const [note, setNote] = useState('')
   const [asked, setAsked] = useState(false)
   const pick = (id: string) => {
-    if (id === 'other' && note.trim() === '') return setAsked(true)
-    onReason({ id, note: note.trim() })
+    if (id === 'other' && note.trim() === '') setAsked(true)
+    else onReason({ id, note: note.trim() })
   }
   return (
     <Sheet isOpen title={title} onClose={onClose}>

@@ -9,6 +9,8 @@ interface StopPickerProps {
 
 /** What this place asks, in order, each with how it stands: a skipped check leaves a visible hole, and any can be jumped to. */
 export function StopPicker({ here, stop, onPick }: StopPickerProps) {
+  // One of the rest, answered by itself, belongs to the rest.
+  const current = here.oneByOne.some(({ check }) => check.id === stop.check) ? stop.check : null
   const stops = [
     ...here.oneByOne.map((item) => ({ check: item.check.id, words: item.check.short, state: stateOf(item) })),
     ...(here.together.length > 0 ? [{ check: null, words: 'the rest', state: restState(here.together) }] : []),
@@ -19,7 +21,7 @@ export function StopPicker({ here, stop, onPick }: StopPickerProps) {
         <li key={check ?? 'rest'} className="shrink-0">
           <button
             type="button"
-            aria-current={stop.check === check ? 'step' : undefined}
+            aria-current={current === check ? 'step' : undefined}
             onClick={() => onPick({ place: here.place.id, check })}
             className="target flex items-center gap-2 border-b-4 border-transparent px-2 aria-[current=step]:border-accent aria-[current=step]:font-bold"
           >

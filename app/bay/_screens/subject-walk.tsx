@@ -2,8 +2,11 @@
 
 import { useState } from 'react'
 import { useDay } from '@/app/_crew/day-context'
+import { ProblemNotice } from '@/app/_crew/problem-notice'
+import { useAction } from '@/app/_crew/use-action'
 import { goTo } from '@/app/_crew/use-location'
 import { ago } from '@/app/_crew/say-when'
+import { useMinute } from '@/app/_crew/status-strip'
 import { Button } from '@/app/_ui/button'
 import { Notice } from '@/app/_ui/notice'
 import { OutcomeShape } from '@/app/_ui/outcome-shape'
@@ -12,7 +15,6 @@ import type { CarFacts } from '@/lib/checklist/car-facts'
 import type { Depth } from '@/lib/checklist/checklist'
 import { wireSentence, wireStations } from '@/lib/inspection/wire'
 import { subjectKey } from '@/lib/inspection/subject'
-import { dayProblemOf, type DayProblem } from '@/lib/sync/client/day-problem'
 import { recallWalk } from '@/lib/walk/walk-memory'
 import { nextStop } from '@/lib/walk/walk-plan'
 import { BlockList } from './block-list'
@@ -35,9 +37,9 @@ interface SubjectWalkProps {
 /** One subject's walk from above: the wire, the verdict, what is open, where to go on, and the pass or band when it is earned. */
 export function SubjectWalk({ walk, base, told }: SubjectWalkProps) {
   const day = useDay()
-  const [busy, setBusy] = useState(false)
   const [changing, setChanging] = useState(false)
-  const [problem, setProblem] = useState<DayProblem | null>(null)
+  const { busy, problem, act } = useAction()
+  const now = useMinute()
   const { state, book, plan } = walk
   const kind = 'car' in walk.subject ? 'car' : 'person'
   if (!book)
@@ -53,8 +55,7 @@ export function SubjectWalk({ walk, base, told }: SubjectWalkProps) {
   const present = async (facts: CarFacts, depth: Depth) => {
     const event = day.snapshot()?.event
     if (!event) return
-    setBusy(true)
-    try {
+    await act(async () => {
       await day.record([
         {
           kind: 'presented',
@@ -67,14 +68,7 @@ export function SubjectWalk({ walk, base, told }: SubjectWalkProps) {
         },
       ])
       setChanging(false)
-      setProblem(null)
-    } catch (error) {
-      const known = dayProblemOf(error)
-      if (!known) throw error
-      setProblem(known)
-    } finally {
-      setBusy(false)
-    }
+    })
   }
 
   const isPresented = state.presentedHeads.length > 0
@@ -93,7 +87,7 @@ export function SubjectWalk({ walk, base, told }: SubjectWalkProps) {
         <OutcomeShape state={VERDICT_SHAPES[state.verdict]} className="size-9" />
         {state.verdict}
       </p>
-      {problem && <Notice happened={problem.what} kept={problem.kept} todo={problem.todo} />}
+      <ProblemNotice problem={problem} />
       <BlockList walk={walk} />
       {!isPresented || changing ? (
         <section className="grid gap-3">
@@ -116,7 +110,7 @@ export function SubjectWalk({ walk, base, told }: SubjectWalkProps) {
           {next && (
             <Button size="large" onClick={() => goTo(`${base}/${next.place}`)}>
               {left && next.place === left.place
-                ? `Go on: ${placeTitle(walk, next.place)}, you were here ${ago(Date.now() - left.at)}`
+                ? `Go on: ${placeTitle(walk, next.place)}, you were here ${ago((now ?? left.at) - left.at)}`
                 : `Go on: ${placeTitle(walk, next.place)}`}
             </Button>
           )}

@@ -51,6 +51,6 @@ export function useWalk(subject: WalkSubject): Walk {
       lastDay: status.event?.lastDay ?? status.day,
     }
     // The key stands for the subject: two equal subjects are one walk.
-    // eslint-disable-next-line react-hooks/exhaustive-deps -- see above
+    // eslint-disable-next-line react-hooks/exhaustive-deps -- the dependency stands in another form, as the line above says
   }, [day, key, state, status.event?.lastDay, status.day])
 }
