@@ -1,6 +1,7 @@
 import Link from 'next/link'
 import { Brand } from '@/app/_ui/brand'
 import { buttonClass } from '@/app/_ui/button'
+import { HardLink } from '@/app/_ui/hard-link'
 import { PageFrame } from '@/app/_ui/page-frame'
 import { ThemeSwitch } from '@/app/_ui/theme-switch'
 
@@ -24,12 +25,12 @@ export default function HomePage() {
         <Link className={buttonClass('primary')} href="/sign-in">
           Sign in
         </Link>
-        <a className={buttonClass('secondary')} href="/bay">
+        <HardLink className={buttonClass('secondary')} href="/bay">
           Bay
-        </a>
-        <a className={buttonClass('secondary')} href="/pit-exit">
+        </HardLink>
+        <HardLink className={buttonClass('secondary')} href="/pit-exit">
           Pit exit
-        </a>
+        </HardLink>
       </nav>
       <p className="mt-10 max-w-prose border-t pt-4 text-muted">
         A pass records what was seen that day without dismantling. It is no certificate and no warranty, and what could not be seen is

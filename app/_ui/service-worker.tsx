@@ -10,7 +10,7 @@ export function ServiceWorker() {
   useEffect(() => {
     if (process.env.NODE_ENV !== 'production' || !('serviceWorker' in navigator)) return
     let isOver = false
-    let end = () => undefined as void
+    let end: (() => void) | null = null
     watchForNewVersion(navigator.serviceWorker).then(
       (stop) => {
         if (isOver) stop()
@@ -21,7 +21,7 @@ export function ServiceWorker() {
     )
     return () => {
       isOver = true
-      end()
+      end?.()
     }
   }, [])
 

@@ -21,7 +21,7 @@ export interface TextKeysProps {
 export const FIGURE_KEYS: readonly string[] = ['1', '2', '3', '4', '5', '6', '7', '8', '9', '0']
 
 /** Letters and figures that are not mistaken for one another, for codes typed from a sticker. */
-export const CODE_KEYS: readonly string[] = [...'0123456789ABCDEFGHJKMNPQRSTVWXYZ']
+export const CODE_KEYS: readonly string[] = Array.from('0123456789ABCDEFGHJKMNPQRSTVWXYZ')
 
 /** Keys for a short code, for gloves; a keyboard types into the same value. */
 export function TextKeys({ label, value, onChange, keys, maxLength, description, judgement }: TextKeysProps) {
@@ -30,7 +30,7 @@ export function TextKeys({ label, value, onChange, keys, maxLength, description,
   const isPad = keys.length <= 10
   const take = (text: string) =>
     onChange(
-      [...text.toUpperCase()]
+      Array.from(text.toUpperCase())
         .filter((char) => keys.includes(char))
         .join('')
         .slice(0, maxLength),

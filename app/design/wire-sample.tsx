@@ -10,7 +10,7 @@ const LABELS = ['papers', 'seat', 'harness', 'cage', 'cabin', 'electrics', 'engi
 
 function bolts(states: string): readonly WireBolt[] {
   const words: Readonly<Record<string, OutcomeState>> = { o: 'ok', a: 'advisory', f: 'fail', q: 'ask', '.': 'none', n: 'na', h: 'held' }
-  return [...states].map((letter, index) => ({ label: LABELS[index] ?? '', state: words[letter] ?? 'none' }))
+  return Array.from(states, (letter, index) => ({ label: LABELS[index] ?? '', state: words[letter] ?? 'none' }))
 }
 
 const ROWS = [

@@ -1,6 +1,7 @@
 import type { Metadata } from 'next'
 import { connection } from 'next/server'
 import { buttonClass } from '@/app/_ui/button'
+import { HardLink } from '@/app/_ui/hard-link'
 import { TryAgain } from './try-again'
 
 export const metadata: Metadata = { title: 'No network' }
@@ -16,12 +17,12 @@ export default async function OfflinePage() {
       </p>
       <p className="mt-4">These work without it, once the day is loaded:</p>
       <nav aria-label="What works offline" className="mt-4 flex flex-wrap gap-4">
-        <a className={buttonClass('primary')} href="/bay">
+        <HardLink className={buttonClass('primary')} href="/bay">
           Bay
-        </a>
-        <a className={buttonClass('primary')} href="/pit-exit">
+        </HardLink>
+        <HardLink className={buttonClass('primary')} href="/pit-exit">
           Pit exit
-        </a>
+        </HardLink>
         <TryAgain />
       </nav>
     </main>

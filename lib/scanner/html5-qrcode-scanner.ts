@@ -104,7 +104,7 @@ function dropSlowDecoder(scanner: Html5Qrcode): void {
 /** The library says why in prose only; the browser knows it as facts. */
 async function whyNoCamera(): Promise<ScanProblemCode> {
   if (!window.isSecureContext || navigator.mediaDevices === undefined) return 'insecure'
-  const permission = await navigator.permissions.query({ name: 'camera' as PermissionName }).catch(() => null)
+  const permission = await navigator.permissions.query({ name: 'camera' }).catch(() => null)
   if (permission?.state === 'denied') return 'refused'
   const devices = await navigator.mediaDevices.enumerateDevices().catch(() => [])
   return devices.some(({ kind }) => kind === 'videoinput') ? 'busy' : 'no-camera'

@@ -80,7 +80,9 @@ type Tokens = Readonly<Record<string, string>>
 function tokensOf(selector: string): Tokens {
   const start = css.indexOf(`${selector} {`)
   const block = css.slice(start, css.indexOf('}', start))
-  return Object.fromEntries([...block.matchAll(/--([\w-]+):\s*(#[0-9a-f]{6});/g)].map(([, name, value]) => [name, value]))
+  return Object.fromEntries(
+    [...block.matchAll(/--([\w-]+):\s*(#[0-9a-f]{6});/g)].map(([, name = '', value = '']) => [name, value] as const),
+  )
 }
 
 /** WCAG 2.2, definition of contrast ratio. */
