@@ -13,6 +13,9 @@ const subject = z.union([
   z.strictObject({ event: id }),
 ])
 
+/** Built once: a schema made at each record costs more than the record. */
+const headSchema = z.object({ v: z.unknown(), kind: z.unknown() })
+
 /** What is read of a kind or version this build does not know; the rest stays in the signed text, which is forwarded as it is (rule T3). */
 const unknownSchema = z.object({
   v: z.int().check(z.gte(1)),
@@ -33,7 +36,7 @@ const unknownSchema = z.object({
  * envelope and effect, so that its *stops* still stops. The problem names the field, for the log and for "needs attention".
  */
 export function parseRecord(payload: unknown): ParsedRecord {
-  const head = z.object({ v: z.unknown(), kind: z.unknown() }).safeParse(payload)
+  const head = headSchema.safeParse(payload)
   if (!head.success) return { ok: false, problem: 'not a record: no object with v and kind' }
   const { v, kind } = head.data
   if (v !== RECORD_VERSION || typeof kind !== 'string' || !Object.hasOwn(RECORD_KINDS, kind)) return parseUnknown(payload)

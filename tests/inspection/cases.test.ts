@@ -4,7 +4,8 @@ import { foldSubject } from '@/lib/inspection/fold-subject'
 import type { SubjectState } from '@/lib/inspection/state'
 import { everyOrder } from '../support/every-order'
 import { CAR_KEY, asText, context } from '../support/paddock'
-import { FOLD_CASES, type Expected } from './cases'
+import { FOLD_CASES } from './cases'
+import type { Expected } from './fold-case'
 
 function look(state: SubjectState, expected: Expected): void {
   if (expected.verdict) expect(state.verdict).toBe(expected.verdict)

@@ -40,7 +40,7 @@ describe('foldEvent', () => {
       const log = Array.from({ length: cars }, (_, index) => aBusyCar(`car ${index} of ${cars}`)).flat()
       let reads = 0
       for (const { record } of log as readonly { readonly record: object }[]) {
-        for (const [name, value] of Object.entries(record)) {
+        for (const [name, value] of Object.entries(record) as [string, unknown][]) {
           Object.defineProperty(record, name, { enumerable: true, get: () => ((reads += 1), value) })
         }
       }

@@ -119,7 +119,7 @@ export function finding(check: string, outcome: FindingOutcome, said: FindingSai
     ...(paramsHash ? { paramsHash } : {}),
     ...(carriedFrom === undefined ? {} : { carriedFrom }),
   }
-  return make<'finding'>(extra as never, said, CAR)
+  return make<'finding'>(extra, said, CAR)
 }
 
 export function ruling(check: string, outcome: RecordOf<'ruling'>['outcome'], said: Said): LogEntry {
