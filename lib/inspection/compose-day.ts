@@ -11,9 +11,11 @@ export function wetOffBasis(entries: readonly LogEntry[]): readonly string[] {
 }
 
 /**
- * What a new recall names in `answers`: the records that met its trigger before it was made and shall not make it due at once
- * ("after session 1" on the second day). Left empty, it is due straight away.
+ * What a new recall names in `answers`: the records that met its trigger before it was made and shall not make it due at once ("after session 1"
+ * on the second day; rain that is over). What meets it now is not named: while it is wet, or a passenger is already in, it is due straight away.
  */
 export function recallAnswers(entries: readonly LogEntry[], key: SubjectKey, trigger: RecallTrigger): readonly string[] {
-  return recordsMeeting(trigger, readDay(entries), readLog(entries, key).of('entry-changed'))
+  if (trigger.when === 'time' || trigger.when === 'passenger') return []
+  const day = readDay(entries)
+  return recordsMeeting(trigger, day, readLog(entries, key).of('entry-changed')).filter((hash) => !day.wetInForce.has(hash))
 }

@@ -122,6 +122,14 @@ describe('what other records name', () => {
     expect(wetOffBasis(log)).toEqual([again.hash])
     expect(recallAnswers(log, CAR_KEY, { when: 'session-over', group: GROUP_A, session: 1 })).toEqual([over.hash])
     expect(recallAnswers(log, CAR_KEY, { when: 'session-over', group: GROUP_A, session: 4 })).toEqual([])
+    expect(recallAnswers(log, CAR_KEY, { when: 'wet' })).toEqual([wet.hash])
+  })
+
+  test('a recall before a passenger or at a time that is already so is due at once: it names nothing as past', () => {
+    const aboard = entryChanged({ what: 'people', added: [], removed: [], passengers: ['0'.repeat(36)] })
+    const log = [aboard, day({ what: 'time', at: 5000 })]
+    expect(recallAnswers(log, CAR_KEY, { when: 'passenger' })).toEqual([])
+    expect(recallAnswers(log, CAR_KEY, { when: 'time', at: 4000 })).toEqual([])
   })
 
   test('a judgement proposes its outcome, and an undecided one none', () => {
