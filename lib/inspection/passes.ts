@@ -95,7 +95,7 @@ export function passStates(killers: Killers, conditions: readonly string[], cont
       const state = killedBy.length > 0 ? 'dead' : entry.isFull ? 'live' : 'quarantined'
       return { hash: entry.hash, record: entry.record, state, killedBy, conditions }
     })
-    .sort((a, b) => a.record.at - b.record.at || (a.hash < b.hash ? -1 : 1))
+    .sort((a, b) => a.record.at - b.record.at || a.record.deviceSeq - b.record.deviceSeq || (a.hash < b.hash ? -1 : 1))
 }
 
 function killedByAny(pass: PassEntry, killers: Killers, context: FoldContext): PassState['killedBy'] {
