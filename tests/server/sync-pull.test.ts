@@ -114,7 +114,7 @@ describe('live', () => {
     const actor = { kind: 'account', clubId: paddock.database().select().from(tables.club).get()?.id }
     const deps = { database: paddock.database(), now: paddock.time.now, signal: stop.signal }
     const stream = (await watchEvent(
-      { params: { event: paddock.event }, query: {}, body: {} } as never,
+      { params: { event: paddock.event }, query: {}, body: {} },
       actor as never,
       deps as never,
     )) as AsyncIterable<unknown>
@@ -149,7 +149,7 @@ describe('live', () => {
     const { paddock } = await withRecords(0)
     const deps = { database: paddock.database(), signal: new AbortController().signal }
     const answer = await watchEvent(
-      { params: { event: paddock.event }, query: {}, body: {} } as never,
+      { params: { event: paddock.event }, query: {}, body: {} },
       { kind: 'account', clubId: 'another' } as never,
       deps as never,
     )

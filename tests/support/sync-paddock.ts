@@ -56,7 +56,7 @@ export interface SyncPaddock {
   readonly database: () => Db
   readonly cars: readonly string[]
   readonly drivers: readonly string[]
-  readonly phone: (...roles: readonly (readonly Role[])[]) => Promise<Phone>
+  readonly phone: (...roles: (readonly Role[])[]) => Promise<Phone>
   readonly server: Reachable
   readonly backUp: () => Buffer
   readonly restore: (copy: Buffer) => void
@@ -78,7 +78,7 @@ function inMemory(copy: Buffer): Db {
   const client = new Database(copy)
   client.pragma('foreign_keys = ON')
   client.pragma('recursive_triggers = ON')
-  return drizzle({ client, schema: tables }) as Db
+  return drizzle({ client, schema: tables })
 }
 
 /** A real server over a real database, and phones that reach it through a fake network under a fake clock. */
@@ -102,12 +102,12 @@ export async function aSyncPaddock({ cars = 2 } = {}): Promise<SyncPaddock> {
       return { state: 'answered', value: result as T }
     }
     return {
-      push: (body: SyncPushRequest) => ask((actor, deps) => acceptPush({ body, params: {}, query: {} } as never, actor, deps)),
-      pull: (query: SyncPullRequest) => ask((actor, deps) => servePull({ query, params: {}, body: {} } as never, actor, deps)),
+      push: (body: SyncPushRequest) => ask((actor, deps) => acceptPush({ body, params: {}, query: {} }, actor, deps)),
+      pull: (query: SyncPullRequest) => ask((actor, deps) => servePull({ query, params: {}, body: {} }, actor, deps)),
     }
   }
 
-  async function phone(...roles: readonly (readonly Role[])[]): Promise<Phone> {
+  async function phone(...roles: (readonly Role[])[]): Promise<Phone> {
     count += 1
     const people = (roles.length === 0 ? [['scrutineer'] as const] : roles).map((held, index) =>
       aCrewMember(database, `Crew ${count}.${index + 1}`, held),

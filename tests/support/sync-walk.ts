@@ -45,5 +45,5 @@ export async function seesAll(day: DayClient, car: string): Promise<readonly Sav
 
 export async function one(day: DayClient, draft: Draft): Promise<SavedRecord> {
   const [saved] = await day.record([draft])
-  return saved as SavedRecord
+  return saved
 }

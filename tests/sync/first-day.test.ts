@@ -60,6 +60,7 @@ test('a hold made at the pit exit kills the pass there at once, and in the bay a
   for (const check of bay.day.state(`car:${car}`).blocks.flatMap(({ checksLeft }) => checksLeft)) await finds(bay.day, car, check, 'ok')
   await bay.day.drain()
   expect(bay.day.state(`car:${car}`).verdict).toBe('passed')
+  paddock.time.now += 60_000
   await expect(bay.day.issuePass({ entry: car, passengerSeatUsable: false })).resolves.toMatchObject({ payload: { counter: 2 } })
   await bay.day.drain()
   await exit.day.drain()

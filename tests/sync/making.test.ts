@@ -1,5 +1,5 @@
 import { describe, expect, test } from 'vitest'
-import { DayError } from '@/lib/sync/client/day-problem'
+import { type DayError } from '@/lib/sync/client/day-problem'
 import { IDLE_FOR_MS, UNLOCKED_FOR_MS } from '@/lib/sync/client/day-client'
 import { makeDeviceKey, signJwsWith, type DeviceKey } from '@/lib/sync/client/device-key'
 import { recordOfJws } from '@/lib/sync/core/held-record'

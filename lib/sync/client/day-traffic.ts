@@ -9,6 +9,9 @@ export type DayTraffic = Pick<DayClient, 'push' | 'pull' | 'drain' | 'loadDay'>
 
 /** Rounds of push and pull in one drain: a restored server needs two, and one more where it was restored at a place that fits. */
 const MOST_ROUNDS = 6
+/** Loading waits for another drain this long at most: 600 × 100 ms. */
+const LOAD_TRIES = 600
+const LOAD_WAIT_MS = 100
 
 /** The day's way to the server and back: one tab at a time. */
 export function dayTraffic(parts: DayParts): DayTraffic {
@@ -48,7 +51,7 @@ export function dayTraffic(parts: DayParts): DayTraffic {
     const tell = (step: LoadProgress['step'], of: number | null = null) =>
       progress?.({ step, records: disk.pull().seq, entries: disk.memory.snapshot()?.entries.length ?? 0, of })
     tell('event')
-    const outcome = await alone('loading', () => drainWith(engine, (_, of) => tell('records', of)))
+    const outcome = await onceAlone(() => alone('loading', () => drainWith(engine, (_, of) => tell('records', of))))
     if (outcome.state === 'failed') throw new DayError(outcome.problem)
     tell('checklists')
     const event = disk.memory.snapshot()?.event
@@ -59,6 +62,16 @@ export function dayTraffic(parts: DayParts): DayTraffic {
     tell('done')
     bump()
     return check
+  }
+
+  /** Who loads the day waits for whoever is at it already (the loop, another tab), and then looks again itself. */
+  async function onceAlone(work: () => Promise<DrainOutcome>): Promise<DrainOutcome> {
+    for (let tries = 0; tries < LOAD_TRIES; tries += 1) {
+      const outcome = await work()
+      if (outcome.state !== 'other-tab') return outcome
+      await new Promise<void>((done) => parts.tools.setTimer(done, LOAD_WAIT_MS))
+    }
+    return { state: 'other-tab' }
   }
 
   return {

@@ -5,6 +5,9 @@ type FilledIn = 'v' | 'id' | 'event' | 'device' | 'deviceSeq' | 'actor' | 'at' |
 /** What the client works out from the subject's state where the screen does not say it. */
 type WorkedOut = 'basis' | 'answers' | 'shown' | 'effect'
 
+/** Read-only all the way down, so that a draft may be a constant. */
+type Frozen<T> = T extends readonly (infer E)[] ? readonly Frozen<E>[] : T extends object ? { readonly [P in keyof T]: Frozen<T[P]> } : T
+
 /**
  * A record of kind `K` before it is one: what was seen, without envelope.
  *
@@ -14,7 +17,7 @@ type WorkedOut = 'basis' | 'answers' | 'shown' | 'effect'
  * - `shown` is number and plate tail as this client's `entries()` give them at the moment of saving. A screen that was drawn earlier and kept open passes
  *   what *it* showed, so that a change of number in between is noticed (case 18).
  */
-export type DraftOf<K extends RecordKind> = Omit<RecordOf<K>, FilledIn | WorkedOut> & Partial<Pick<RecordOf<K>, WorkedOut>>
+export type DraftOf<K extends RecordKind> = Frozen<Omit<RecordOf<K>, FilledIn | WorkedOut> & Partial<Pick<RecordOf<K>, WorkedOut>>>
 
 /** Any draft. Written as a plain object: `{ kind: 'finding', subject: { car }, check: 'brakes.pads', outcome: 'ok' }`. */
 export type Draft = { [K in RecordKind]: DraftOf<K> }[RecordKind]

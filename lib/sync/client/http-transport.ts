@@ -72,11 +72,12 @@ export function httpTransport(enrolment: Enrolment, tools: Pick<DayTools, 'now' 
             onOpen()
             await readEventStream(answer.body, onPoke)
           }
-        } catch {
-          // The stream ended by itself or by us; either way polling goes on (rule S8).
-        } finally {
-          if (!stop.signal.aborted) onEnd()
+        } catch (error) {
+          if (stop.signal.aborted) return
+          // Why it broke changes nothing: polling goes on and the stream is tried again (rule S8). A bug of ours would be one here too.
+          if (!(error instanceof TypeError) && !(error instanceof DOMException)) throw error
         }
+        if (!stop.signal.aborted) onEnd()
       })()
       return () => stop.abort()
     },

@@ -1,4 +1,3 @@
-import type { RecordOf } from '@/lib/inspection/record'
 import type { SubjectState } from '@/lib/inspection/state'
 import { subjectKey } from '@/lib/inspection/subject'
 import type { PassPayload } from '@/lib/pass/pass-payload'
@@ -67,7 +66,7 @@ export function issuing({ enrolment, memory, cars, day, save }: IssuingParts): {
     }, [])
     const saved = made.saved[0] as Issued<K>['saved'] | undefined
     if (saved === undefined || payload === null) throw new Error('impossible: a pass was saved without a record')
-    const { token } = saved.record as RecordOf<'pass'> | RecordOf<'band'>
+    const { token } = saved.record
     return { saved, payload, token, qrText: qrText(memory.snapshot()?.event.publicOrigin ?? '', token), typedCode: typedCode(token) }
   }
 

@@ -64,7 +64,10 @@ export function startLoop({ drain, transport, tools, network, onLink }: LoopPart
     failures = outcome.state === 'failed' ? failures + 1 : 0
     onLink(failed ? 'offline' : isLive ? 'live' : 'polling')
     // Asked for while it ran: whatever was saved meanwhile may have come too late for the batch.
-    if (wanted && outcome.state !== 'failed') return schedule(SOON_MS)
+    if (wanted && outcome.state !== 'failed') {
+      schedule(SOON_MS)
+      return
+    }
     schedule(outcome.state === 'failed' ? backOffMs(failures, tools.random()) : isLive ? QUIET_MS : POLL_MS)
   }
 

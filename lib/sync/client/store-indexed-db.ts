@@ -50,7 +50,7 @@ async function list(useStore: UseStore, prefix: string): Promise<readonly (reado
   return useStore('readonly', async (store) => {
     const range = IDBKeyRange.bound(prefix, `${prefix}\uffff`)
     const [keys, values] = await Promise.all([promisifyRequest(store.getAllKeys(range)), promisifyRequest(store.getAll(range))])
-    return keys.map((key, index) => [String(key), values[index] as unknown] as const)
+    return keys.map((key, index) => [key as string, values[index] as unknown] as const)
   })
 }
 

@@ -11,7 +11,7 @@ import { verifyRecords } from './verify-records'
 export const acceptPush: Command<typeof syncPush> = async ({ body }, actor, { database, now }) => {
   if (body.event !== actor.eventId) return refuse('missing')
   if (body.protocol !== PROTOCOL_VERSION) return refuse('protocol-too-old')
-  const verified = await verifyRecords(database, body.event, actor.clubId, body.records, body.certificates, now)
+  const verified = await verifyRecords(database, actor, body.records, body.certificates, now)
   const pusher = { deviceId: actor.deviceId, unsent: body.unsent }
   const { answers, stored } = pushIntoLog(database, body.event, verified, body.notes, pusher, now)
   if (stored > 0) announce(body.event)

@@ -1,9 +1,8 @@
 import 'server-only'
 import { and, asc, desc, eq, inArray } from 'drizzle-orm'
 import type { Db } from '@/db/client'
-import { car, crewMember, declaration, device, entry, entryPerson, event, person, runGroup } from '@/db/schema'
+import { car, crewMember, declaration, device, entry, entryPerson, type event, person, runGroup } from '@/db/schema'
 import type { DaySnapshot } from '@/lib/contracts/day-snapshot'
-import { isKnown } from '@/lib/inspection/record'
 import { plateTail } from '@/lib/pass/plate-tail'
 import { sha256 } from '@/lib/platform/sha256'
 import type { EventFrame } from './event-frame'
@@ -41,8 +40,7 @@ interface Pinned {
 function pinnedHashes({ event: row }: EventFrame, log: EventLog): Pinned {
   const checklists = new Set([row.checklistHash])
   const limits = new Set([row.limitsHash])
-  for (const { record } of log.byHash.values()) {
-    if (!isKnown(record) || record.kind !== 'presented') continue
+  for (const { record } of [...log.presented.values()].flat()) {
     checklists.add(record.checklist)
     limits.add(record.limits)
   }

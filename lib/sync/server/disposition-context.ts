@@ -1,9 +1,8 @@
 import 'server-only'
 import type { Db } from '@/db/client'
 import { judgeCheck } from '@/lib/checklist/judge-check'
-import type { LogEntry } from '@/lib/inspection/log-entry'
 import { isKnown, type AnyRecord, type RecordOf } from '@/lib/inspection/record'
-import { subjectKey } from '@/lib/inspection/subject'
+import { subjectKey, type SubjectKey } from '@/lib/inspection/subject'
 import type { DeviceActor } from '@/lib/platform/actor'
 import type { JudgementOutcome } from '@/lib/rules/judgement'
 import { civilDate } from '@/lib/rules/civil-date'
@@ -23,7 +22,7 @@ export function dispositionContext(
   record: AnyRecord,
   device: DeviceActor | null,
 ): DispositionContext {
-  const own = log.bySubject.get(subjectKey(record.subject)) ?? []
+  const key = subjectKey(record.subject)
   return {
     enrolled: device !== null,
     device: {
@@ -34,17 +33,17 @@ export function dispositionContext(
     actorRoles: device?.people.find(({ personId }) => personId === record.actor)?.roles ?? [],
     shown: shownOf(frame, log, record),
     get presentedHeads() {
-      return presentedHeads(own)
+      return presentedHeads(log, key)
     },
     makerOf: (hash) => {
       const entry = log.byHash.get(hash)
-      return entry !== undefined && subjectKey(entry.record.subject) === subjectKey(record.subject) ? entry.record.actor : null
+      return entry !== undefined && subjectKey(entry.record.subject) === key ? entry.record.actor : null
     },
-    judge: (finding) => judgeByRule(database, frame, finding, presentedHeads(own)),
+    judge: (finding) => judgeByRule(database, frame, finding, presentedHeads(log, key)),
     failsByRule: (hash) => {
       const named = log.byHash.get(hash)?.record
       if (named === undefined || !isKnown(named) || named.kind !== 'finding') return false
-      return judgeByRule(database, frame, named, presentedHeads(own)) === 'fail'
+      return judgeByRule(database, frame, named, presentedHeads(log, key)) === 'fail'
     },
   }
 }
@@ -53,17 +52,11 @@ function shownOf(frame: EventFrame, log: EventLog, { subject }: AnyRecord): Disp
   const id = 'car' in subject ? subject.car : 'fit' in subject ? subject.fit : null
   const entry = id === null ? undefined : frame.entries.get(id)
   if (id === null || entry === undefined) return null
-  const records = log.bySubject.get(subjectKey({ car: id })) ?? []
-  return entryNow(
-    entry,
-    records.map(({ record, disposition }) => ({ record, quarantined: disposition.state === 'quarantined' })),
-  )
+  return entryNow(entry, log.changes.get(subjectKey({ car: id })) ?? [])
 }
 
-function presentedHeads(own: readonly LogEntry[]): readonly RecordOf<'presented'>[] {
-  const believed = own.flatMap(({ hash, record, disposition }) =>
-    isKnown(record) && record.kind === 'presented' && disposition.state === 'accepted' ? [{ hash, record }] : [],
-  )
+function presentedHeads(log: EventLog, key: SubjectKey): readonly RecordOf<'presented'>[] {
+  const believed = log.presented.get(key) ?? []
   const replaced = new Set(believed.flatMap(({ record }) => record.basis))
   return believed.filter(({ hash }) => !replaced.has(hash)).map(({ record }) => record)
 }

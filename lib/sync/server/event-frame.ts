@@ -7,6 +7,7 @@ import { subjectKey, type SubjectKey } from '@/lib/inspection/subject'
 import { plateTail } from '@/lib/pass/plate-tail'
 import { venueDay } from '@/lib/rules/venue-day'
 import type { ChangeableEntry } from '../core/entry-now'
+import { logStatements } from './log-statements'
 import { pinnedBook } from './pinned-books'
 
 /** What is known of an event besides its log: ordinary rows, read once per version of the snapshot. */
@@ -20,13 +21,15 @@ const holder = globalThis as typeof globalThis & { lockwireFrames?: WeakMap<obje
 
 /** The frame of an event; null where there is no such event. Kept until the event's snapshot version moves on: whoever changes those rows moves it. */
 export function eventFrame(database: Db, eventId: string): EventFrame | null {
-  const row = database.select().from(event).where(eq(event.id, eventId)).get()
-  if (row === undefined) return null
+  const version = logStatements(database).snapshotVersion.get(eventId)
+  if (version === undefined) return null
   holder.lockwireFrames ??= new WeakMap()
   const frames = holder.lockwireFrames.get(database.$client) ?? new Map<string, EventFrame>()
   holder.lockwireFrames.set(database.$client, frames)
   const known = frames.get(eventId)
-  if (known !== undefined && known.event.snapshotVersion === row.snapshotVersion) return { ...known, event: row }
+  if (known?.event.snapshotVersion === version.snapshotVersion) return known
+  const row = database.select().from(event).where(eq(event.id, eventId)).get()
+  if (row === undefined) return null
   const rows = database.select().from(entry).where(eq(entry.eventId, eventId)).all()
   const entries = new Map(rows.map(({ id, number, plate, groupId }) => [id, { number, plateTail: plateTail(plate), group: groupId }]))
   const frame: EventFrame = { event: row, entries, declared: declaredOf(database, eventId) }

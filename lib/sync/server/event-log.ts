@@ -1,6 +1,7 @@
 import 'server-only'
 import type { Db } from '@/db/client'
 import type { LogEntry } from '@/lib/inspection/log-entry'
+import { isKnown, type AnyRecord, type RecordOf } from '@/lib/inspection/record'
 import { subjectKey, type SubjectKey } from '@/lib/inspection/subject'
 import { dispositionOf, recordOfJws } from '../core/held-record'
 import { logStatements, type LogRow } from './log-statements'
@@ -11,6 +12,9 @@ export interface EventLog {
   chain: string
   readonly bySubject: Map<SubjectKey, LogEntry[]>
   readonly byHash: Map<string, LogEntry>
+  /** Of each subject, what a record's disposition depends on: accepted `presented` records, and what changed about an entry. */
+  readonly presented: Map<SubjectKey, { readonly hash: string; readonly record: RecordOf<'presented'> }[]>
+  readonly changes: Map<SubjectKey, { readonly record: AnyRecord; readonly quarantined: boolean }[]>
   /** Moves on whenever a record about the event itself came. */
   eventVersion: number
 }
@@ -30,7 +34,7 @@ export function eventLog(database: Db, eventId: string): EventLog {
   let log = logs.get(eventId)
   if (log !== undefined && log.seq === head.seq && log.chain === head.chain) return log
   const fits = log !== undefined && log.seq < head.seq && (log.seq === 0 || statements.at.get(eventId, log.seq)?.chain === log.chain)
-  if (log === undefined || !fits) log = { seq: 0, chain: '', bySubject: new Map(), byHash: new Map(), eventVersion: 0 }
+  if (log === undefined || !fits) log = emptyLog()
   while (log.seq < head.seq) for (const row of statements.after.all(eventId, log.seq, PAGE)) appendRow(log, row)
   logs.set(eventId, log)
   return log
@@ -41,11 +45,23 @@ export function append(log: EventLog, entry: LogEntry, row: Pick<LogRow, 'seq' |
   log.seq = row.seq
   log.chain = row.chain
   const key = subjectKey(entry.record.subject)
-  const own = log.bySubject.get(key)
-  if (own === undefined) log.bySubject.set(key, [entry])
-  else own.push(entry)
-  log.byHash.set(entry.hash, entry)
+  const { hash, record, disposition } = entry
+  addTo(log.bySubject, key, entry)
+  log.byHash.set(hash, entry)
+  if (isKnown(record) && record.kind === 'presented' && disposition.state === 'accepted') addTo(log.presented, key, { hash, record })
+  if (isKnown(record) && record.kind === 'entry-changed')
+    addTo(log.changes, key, { record, quarantined: disposition.state === 'quarantined' })
   if ('event' in entry.record.subject) log.eventVersion += 1
+}
+
+function emptyLog(): EventLog {
+  return { seq: 0, chain: '', bySubject: new Map(), byHash: new Map(), presented: new Map(), changes: new Map(), eventVersion: 0 }
+}
+
+function addTo<T>(map: Map<SubjectKey, T[]>, key: SubjectKey, value: T): void {
+  const own = map.get(key)
+  if (own === undefined) map.set(key, [value])
+  else own.push(value)
 }
 
 /** Forgets what is in memory: after a transaction that was rolled back. */

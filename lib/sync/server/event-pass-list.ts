@@ -48,11 +48,7 @@ export function eventPassList(database: Db, frame: EventFrame, log: EventLog, sn
 function entriesOf(snapshot: DaySnapshot, log: EventLog): readonly EntryForList[] {
   const groups = new Map(snapshot.groups.map(({ id, name }) => [id, name]))
   return snapshot.entries.map((entry) => {
-    const records = log.bySubject.get(subjectKey({ car: entry.id })) ?? []
-    const now = entryNow(
-      entry,
-      records.map(({ record, disposition }) => ({ record, quarantined: disposition.state === 'quarantined' })),
-    )
+    const now = entryNow(entry, log.changes.get(subjectKey({ car: entry.id })) ?? [])
     return { ...now, groupName: groups.get(now.group) ?? '' }
   })
 }

@@ -24,6 +24,7 @@ export interface NewRow extends LogRow {
 }
 
 export interface LogStatements {
+  readonly snapshotVersion: Statement<[string], { readonly snapshotVersion: number }>
   readonly head: Statement<[string], { readonly seq: number; readonly chain: string }>
   readonly at: Statement<[string, number], { readonly chain: string }>
   readonly after: Statement<[string, number, number], LogRow>
@@ -60,6 +61,7 @@ export function logStatements(database: Db): LogStatements {
   const known = made.get(client)
   if (known !== undefined) return known
   const statements: LogStatements = {
+    snapshotVersion: client.prepare('SELECT snapshot_version AS snapshotVersion FROM event WHERE id = ?'),
     head: client.prepare('SELECT seq, chain FROM record WHERE event_id = ? ORDER BY seq DESC LIMIT 1'),
     at: client.prepare('SELECT chain FROM record WHERE event_id = ? AND seq = ?'),
     after: client.prepare(`SELECT ${ROW} FROM record WHERE event_id = ? AND seq > ? ORDER BY seq LIMIT ?`),

@@ -43,13 +43,14 @@ const keys = new Map<string, KeyObject | null>()
 /** Reads and verifies each record by itself, before any transaction: a bad one never touches the rest. In the order given. */
 export async function verifyRecords(
   database: Db,
-  eventId: string,
-  clubId: string,
+  pusher: DeviceActor,
   jwss: readonly string[],
   certificates: readonly string[],
   now: number,
 ): Promise<readonly (VerifiedRecord | RefusedRecord)[]> {
-  const signers = new Map<string, Signer | null>()
+  const { eventId, clubId } = pusher
+  // Who pushes was read from the rows a moment ago, at the door.
+  const signers = new Map<string, Signer | null>([[pusher.deviceId, signer(pusher, pusher.publicKey)]])
   function signerOf(device: string): Signer | null {
     const known = signers.get(device)
     if (known !== undefined) return known
