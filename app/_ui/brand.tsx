@@ -7,7 +7,7 @@ export function Brand() {
     <Link href="/" data-slot="brand" className="target inline-flex items-center gap-2 text-ink">
       <svg viewBox="-2 -14 76 28" className="h-7 w-[76px]" aria-hidden>
         <path
-          d={ropePath({ fromX: 26, toX: 46, y: 0, amplitude: 3.6, pitch: 13 })}
+          d={ropePath({ fromX: 19, toX: 44, y: 0, amplitude: 3.4, pitch: 12 })}
           strokeWidth="2.6"
           strokeLinecap="round"
           className="fill-none stroke-wire"

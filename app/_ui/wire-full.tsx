@@ -5,7 +5,6 @@ import { classNames } from './class-names'
 import { OutcomeMark } from './outcome-shape'
 import { frayPath, hexagonPoints, ropePath } from './wire-geometry'
 import { type WireBolt, type WireLink, wireLinks } from './wire-links'
-import type { WireProps } from './wire'
 
 const WIDTH = 88
 const HEIGHT = 52
@@ -13,8 +12,18 @@ const RADIUS = 23
 const EDGE = WIDTH / 2
 const LAY = { y: 0, amplitude: 3.4, pitch: 13 }
 
+export interface WireFullProps {
+  readonly bolts: readonly WireBolt[]
+  /** The wire in words, for who hears it. */
+  readonly sentence: string
+  /** A bolt is pressed. */
+  readonly onSelect?: (index: number) => void
+  /** Where one is now. */
+  readonly current?: number
+}
+
 /** Bolts in rows that fold to the width they have; the wire runs on from the end of a row to the start of the next. */
-export function WireFull({ bolts, sentence, onSelect, current }: Omit<WireProps, 'scale'>) {
+export function WireFull({ bolts, sentence, onSelect, current }: WireFullProps) {
   const links = wireLinks(bolts)
   return (
     <div data-slot="wire" data-scale="full" role="group" aria-label={sentence}>

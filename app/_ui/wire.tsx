@@ -1,18 +1,11 @@
-import { WireFull } from './wire-full'
-import type { WireBolt } from './wire-links'
+import { WireFull, type WireFullProps } from './wire-full'
 import { WireMark } from './wire-mark'
 import { WireStrip } from './wire-strip'
 
-export interface WireProps {
-  readonly bolts: readonly WireBolt[]
+/** `onSelect` and `current` are for the full scale. The sentence is like “11 of 14 stations ok, brakes failed, 2 to see”. */
+export interface WireProps extends WireFullProps {
   /** `full`: every bolt with its name, to press; `strip`: a row of a list, open and failed ones shaped; `mark`: whole or cut, and a count. */
   readonly scale: 'full' | 'strip' | 'mark'
-  /** The wire in words, for who hears it: “11 of 14 stations ok, brakes failed, 2 to see”. */
-  readonly sentence: string
-  /** Full scale only: a bolt is pressed. */
-  readonly onSelect?: (index: number) => void
-  /** Full scale only: where one is now. */
-  readonly current?: number
 }
 
 /** Progress as one twisted wire through drilled bolts: whole between closed neighbours, cut at a fail, not there yet where nobody has looked. */

@@ -1,5 +1,5 @@
 import { NextRequest } from 'next/server'
-import { expect, test } from 'vitest'
+import { expect, test, vi } from 'vitest'
 import { config, contentSecurityPolicy, proxy } from '@/proxy'
 
 const page = (path: string, init: { method?: string; headers?: Record<string, string> } = {}) =>
@@ -44,6 +44,18 @@ test('what no page of ours is asked with is refused before any page runs', () =>
   expect(page('/bay', { method: 'POST' }).status).toBe(405)
   expect(page('/_next/image?url=%2Fa.png&w=64&q=75').status).toBe(404)
   expect(page('/bay', { method: 'POST' }).headers.get('content-type')).toBe('application/problem+json')
+})
+
+test.each([
+  ['https://bay.example.org', 'max-age=31536000; includeSubDomains'],
+  ['http://localhost:3000', null],
+])('from %s the browser is told to stay with https: %s', async (origin, header) => {
+  vi.stubEnv('LOCKWIRE_ORIGIN', origin)
+  vi.resetModules()
+  const { proxy: fresh } = await import('@/proxy')
+
+  expect(fresh(new NextRequest(`${origin}/`)).headers.get('strict-transport-security')).toBe(header)
+  vi.unstubAllEnvs()
 })
 
 test('uploads never pass through here, where they would be cut: all of /api is outside', () => {
