@@ -75,21 +75,30 @@ const SET_ASIDE: Readonly<Record<QuarantineCode, string>> = {
 }
 
 function blockInWords({ kind, reason, stations, checksLeft, onlyChiefLifts }: Block, book: Book | null): string {
-  const words = book?.checklist.holdReasons.find(({ id }) => id === reason)?.text ?? reason.replaceAll('-', ' ')
+  const words = inASentence(book?.checklist.holdReasons.find(({ id }) => id === reason)?.text ?? reason.replaceAll('-', ' '))
   const why = { hold: `Held: ${words}`, recall: 'Recall due', wet: 'Held: wet declared', unknown: 'Held by a newer version of the app' }[
     kind
   ]
   if (onlyChiefLifts) return `${why}; only the chief lifts it`
-  const again = checksLeft.length > 0 ? nameChecks(checksLeft, book) : nameStations(stations, book)
+  const again = seeAgain(stations, checksLeft, book)
   return again === '' ? why : `${why}; see again ${again}`
+}
+
+/** Whole stations by their name, as the hold names them; checks of other stations one by one. */
+function seeAgain(stations: readonly string[], checksLeft: readonly string[], book: Book | null): string {
+  const stationOf = (check: string) => book?.byId.get(check)?.station ?? ''
+  const touched = stations.filter((station) => checksLeft.length === 0 || checksLeft.some((check) => stationOf(check) === station))
+  const others = checksLeft.filter((check) => !touched.includes(stationOf(check)))
+  return nameSome([...touched.map((id) => book?.stations.get(id)?.short ?? id), ...others.map((id) => book?.byId.get(id)?.short ?? id)])
+}
+
+/** `Fluid dropped` as it stands within a sentence. */
+function inASentence(words: string): string {
+  return words.slice(0, 1).toLowerCase() + words.slice(1)
 }
 
 function nameChecks(ids: readonly string[], book: Book | null): string {
   return nameSome(ids.map((id) => book?.byId.get(id)?.short ?? id))
-}
-
-function nameStations(ids: readonly string[], book: Book | null): string {
-  return nameSome(ids.map((id) => book?.stations.get(id)?.short ?? id))
 }
 
 function nameSome(names: readonly string[]): string {

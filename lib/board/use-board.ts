@@ -11,9 +11,8 @@ export const POLL_SECONDS = 15
 /** While the stream is heard: a line that died without a word is noticed by this. */
 const BESIDE_STREAM_SECONDS = 60
 
-/** How fresh the board is. `since`: server time of what is shown, ms. */
-export type Connection =
-  { readonly state: 'live' } | { readonly state: 'polling' } | { readonly state: 'lost'; readonly since: number; readonly problem: Problem }
+/** How fresh the board is; what is shown is from its own `at`. */
+export type Connection = { readonly state: 'live' } | { readonly state: 'polling' } | { readonly state: 'lost'; readonly problem: Problem }
 
 export interface UsedBoard {
   readonly board: Board
@@ -36,6 +35,6 @@ export function useBoard(eventId: string, first: Board): UsedBoard {
     shouldRetryOnError: false,
   })
   const shown = data ?? first
-  if (error instanceof CallProblem) return { board: shown, connection: { state: 'lost', since: shown.at, problem: error.problem } }
+  if (error instanceof CallProblem) return { board: shown, connection: { state: 'lost', problem: error.problem } }
   return { board: shown, connection: { state: isLive ? 'live' : 'polling' } }
 }

@@ -29,7 +29,7 @@ export function EventTabs({
             <Link
               href={`/events/${eventId}/${tab}`}
               aria-current={tab === current ? 'page' : undefined}
-              className="target heading flex items-center border-b-4 border-transparent px-3 pt-1 text-lg aria-[current=page]:border-accent sm:px-5"
+              className="target heading flex items-center border-b-4 border-transparent px-2 pt-1 text-base aria-[current=page]:border-accent sm:px-5 sm:text-lg"
             >
               {label}
             </Link>

@@ -22,12 +22,12 @@ export function BoardScreen({ eventId, first }: { readonly eventId: string; read
       </EmptyState>
     )
   return (
-    <div className="grid gap-x-8 gap-y-6 xl:grid-cols-[minmax(0,1fr)_400px]">
-      <div className="grid min-w-0 content-start gap-4 xl:col-span-2">
+    <div className="grid gap-x-8 gap-y-6 xl:grid-cols-[minmax(0,1fr)_400px] xl:grid-rows-[auto_1fr]">
+      <div className="grid min-w-0 content-start gap-4">
         <ConnectionLine connection={connection} board={board} />
         <BoardFilterBar filter={filter} onChange={setFilter} rows={board.rows} shown={rows.length} />
       </div>
-      <NeedsColumn rows={rows} className="xl:order-last xl:self-start xl:sticky xl:top-4" />
+      <NeedsColumn rows={board.rows} className="xl:sticky xl:top-4 xl:col-start-2 xl:row-span-2 xl:row-start-1 xl:self-start" />
       <div className="grid min-w-0 content-start gap-8">
         {board.groups.map((group) => (
           <BoardGroupList key={group.id} group={group} rows={rows.filter((row) => row.group === group.id)} board={board} />

@@ -1,11 +1,22 @@
+'use client'
+
+import { useState } from 'react'
+import { Button } from '@/app/_ui/button'
 import { classNames } from '@/app/_ui/class-names'
 import { NumberPlate } from '@/app/_ui/number-plate'
 import { OutcomeShape, type OutcomeState } from '@/app/_ui/outcome-shape'
+import { compareNumbers } from '@/lib/board/compare-numbers'
 import { type BoardRow, NEED_KINDS } from '@/lib/contracts/board'
 
-/** Who needs somebody, and for what; the most pressing on top. */
+/** On a phone the groups stand below this list, so it shows only so many until asked for all. */
+const FIRST = 5
+
+/** Who needs somebody, and for what; the most pressing on top. Whatever the board is searched for, all of them stay. */
 export function NeedsColumn({ rows, className }: { readonly rows: readonly BoardRow[]; readonly className?: string }) {
-  const needing = rows.filter(({ needs }) => needs.length > 0).toSorted((a, b) => pressing(a) - pressing(b))
+  const [all, setAll] = useState(false)
+  const needing = rows
+    .filter(({ needs }) => needs.length > 0)
+    .toSorted((a, b) => pressing(a) - pressing(b) || compareNumbers(a.number, b.number))
   return (
     <aside aria-labelledby="needs" className={classNames('border-2 p-4', className)}>
       <h2 id="needs" className="text-2xl">
@@ -14,9 +25,12 @@ export function NeedsColumn({ rows, className }: { readonly rows: readonly Board
       {needing.length === 0 ? (
         <p className="mt-2 text-muted">Held and failed entries, disagreements and passes that no longer count come here with the reason.</p>
       ) : (
-        <ul className="mt-2 xl:max-h-[calc(100dvh-120px)] xl:overflow-y-auto" tabIndex={0} aria-label="Entries that need somebody">
-          {needing.map((row) => (
-            <li key={row.id} className="grid grid-cols-[76px_minmax(0,1fr)] gap-x-3 border-t py-2">
+        <ul className="mt-2 xl:max-h-[calc(100dvh-120px)] xl:overflow-y-auto" tabIndex={0} aria-labelledby="needs">
+          {needing.map((row, index) => (
+            <li
+              key={row.id}
+              className={classNames('grid grid-cols-[72px_minmax(0,1fr)] gap-x-3 border-t py-2', !all && index >= FIRST && 'max-xl:hidden')}
+            >
               <NumberPlate number={row.number} size="row" />
               <ul>
                 {row.needs.map(({ kind, words }) => (
@@ -29,6 +43,11 @@ export function NeedsColumn({ rows, className }: { readonly rows: readonly Board
             </li>
           ))}
         </ul>
+      )}
+      {needing.length > FIRST && (
+        <Button look="quiet" className="xl:hidden" onClick={() => setAll(!all)}>
+          {all ? `Show the first ${FIRST}` : `Show all ${needing.length}`}
+        </Button>
       )}
     </aside>
   )

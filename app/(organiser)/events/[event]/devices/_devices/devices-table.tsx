@@ -14,7 +14,10 @@ interface DevicesTableProps {
 /** Devices by number: whose, when last heard, what they still hold. */
 export function DevicesTable({ devices, timeZone, mayRetire, onTakeOut }: DevicesTableProps) {
   return (
-    <DataTable caption={devices.length === 1 ? '1 device' : `${devices.length} devices`}>
+    <DataTable
+      caption={devices.length === 1 ? '1 device' : `${devices.length} devices`}
+      className="[&_td]:align-middle [&_th]:align-middle"
+    >
       <thead>
         <tr>
           <Th>No.</Th>
@@ -24,7 +27,7 @@ export function DevicesTable({ devices, timeZone, mayRetire, onTakeOut }: Device
           <Th>Last heard</Th>
           <Th>Still to send</Th>
           {mayRetire && (
-            <Th>
+            <Th className="relative">
               <span className="sr-only">Take out of use</span>
             </Th>
           )}

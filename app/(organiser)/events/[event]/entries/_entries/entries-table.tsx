@@ -28,7 +28,7 @@ export function EntriesTable({ rows, groups, total, sort, onSort }: EntriesTable
   const names = new Map(groups.map(({ id, name }) => [id, name]))
   const caption = rows.length === total ? `${total} entries` : `${rows.length} of ${total} entries`
   return (
-    <DataTable caption={caption}>
+    <DataTable caption={caption} className="[&_td]:align-middle [&_th]:align-middle">
       <thead>
         <tr>
           {ENTRY_COLUMNS.map((column) => (

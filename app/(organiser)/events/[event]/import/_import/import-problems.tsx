@@ -19,7 +19,9 @@ export function ImportProblems({ plan: { problems, problemCount } }: { readonly 
           <tr key={index}>
             <Th scope="row">{row}</Th>
             <Td className="whitespace-nowrap">{column === '' ? 'whole row' : column}</Td>
-            <Td className="serial max-w-60 break-words">{value === '' ? 'nothing' : value}</Td>
+            <Td className="max-w-60 break-words">
+              {value === '' ? <span className="text-muted">empty</span> : <span className="serial">{value}</span>}
+            </Td>
             <Td className="min-w-64">{why}</Td>
           </tr>
         ))}

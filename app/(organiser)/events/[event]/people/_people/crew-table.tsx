@@ -35,7 +35,7 @@ export function CrewTable({ crew, mayDecide, onDecide }: CrewTableProps) {
 
   return (
     <>
-      <DataTable caption={`Crew: ${accepted} accepted`}>
+      <DataTable caption={`Crew: ${accepted} accepted`} className="[&_td]:align-middle [&_th]:align-middle">
         <thead>
           <tr>
             <Th>Name</Th>
@@ -43,7 +43,7 @@ export function CrewTable({ crew, mayDecide, onDecide }: CrewTableProps) {
             <Th>Came by</Th>
             <Th>State</Th>
             {mayDecide && (
-              <Th>
+              <Th className="relative">
                 <span className="sr-only">End</span>
               </Th>
             )}

@@ -32,9 +32,8 @@ export function PeopleScreen({ eventId, timeZone, mayInvite, mayDecide }: People
   }
 
   return (
-    <div className="grid gap-8 lg:grid-cols-[minmax(0,1fr)_360px]">
-      {mayInvite && <JoinCode eventId={eventId} />}
-      <div className="grid content-start gap-6 lg:order-first">
+    <div className="grid gap-8 lg:grid-cols-[minmax(0,1fr)_360px] lg:grid-rows-[auto_1fr]">
+      <div className="grid content-start gap-6">
         <p role="status" className="sr-only">
           {said}
         </p>
@@ -49,16 +48,23 @@ export function PeopleScreen({ eventId, timeZone, mayInvite, mayDecide }: People
         {crew === null ? (
           <p>{problem ? 'The list is not here yet.' : 'Asking for the list …'}</p>
         ) : (
-          <>
-            <WaitingList waiting={waiting} timeZone={timeZone} mayDecide={mayDecide} onDecide={onDecide} />
-            {others.length === 0 ? (
-              <EmptyState title="Nobody is crew yet">Make a join code, let the crew scan it, and accept each of them by name.</EmptyState>
-            ) : (
-              <CrewTable crew={others} mayDecide={mayDecide} onDecide={onDecide} />
-            )}
-          </>
+          <WaitingList waiting={waiting} timeZone={timeZone} mayDecide={mayDecide} onDecide={onDecide} />
         )}
       </div>
+      {mayInvite && (
+        <div className="lg:col-start-2 lg:row-span-2 lg:row-start-1">
+          <JoinCode eventId={eventId} />
+        </div>
+      )}
+      {crew !== null && (
+        <div className="min-w-0">
+          {others.length === 0 ? (
+            <EmptyState title="Nobody is crew yet">Make a join code, let the crew scan it, and accept each of them by name.</EmptyState>
+          ) : (
+            <CrewTable crew={others} mayDecide={mayDecide} onDecide={onDecide} />
+          )}
+        </div>
+      )}
     </div>
   )
 }
