@@ -167,6 +167,7 @@ describe('the list of a device', () => {
     validFrom: '2026-05-09',
     days: 1,
     conditions: [],
+    passengerSeatUsable: false,
   })
   const block = { kind: 'hold', words: 'contact', seeAgain: [], at: 1, stickerRemoved: null } as const
   const line = (more: Partial<ListedEntry>): ListedEntry => ({
