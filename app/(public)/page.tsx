@@ -1,22 +1,12 @@
 import Link from 'next/link'
-import { Brand } from '@/app/_ui/brand'
 import { buttonClass } from '@/app/_ui/button'
 import { HardLink } from '@/app/_ui/hard-link'
 import { PageFrame } from '@/app/_ui/page-frame'
-import { ThemeSwitch } from '@/app/_ui/theme-switch'
+import { PlainBar } from './_frame/plain-bar'
 
 export default function HomePage() {
   return (
-    <PageFrame
-      title="Every check is a bolt, and a car runs only while its wire is whole"
-      width="text"
-      navigation={
-        <div className="flex flex-wrap items-center justify-between gap-3">
-          <Brand />
-          <ThemeSwitch />
-        </div>
-      }
-    >
+    <PageFrame title="Every check is a bolt, and a car runs only while its wire is whole" width="text" navigation={<PlainBar />}>
       <p className="max-w-prose">
         Lockwire keeps what the scrutineers of a track day saw: each car and each person, by whom, against which limit. The crew works with
         the network off; the pit exit knows who may leave.

@@ -3,6 +3,7 @@
 import useSWR from 'swr'
 import type { KeptClaim } from '@/app/_crew/read-claims'
 import { Button, buttonClass } from '@/app/_ui/button'
+import { HardLink } from '@/app/_ui/hard-link'
 import { Notice } from '@/app/_ui/notice'
 import type { AnswerOf } from '@/lib/contracts/contract'
 import { joinState } from '@/lib/contracts/join'
@@ -72,10 +73,9 @@ function Accepted({ kept }: { readonly kept: KeptClaim }) {
         {kept.name} is accepted as {kept.role}
       </p>
       <p>Next this device is enrolled in your name and the day is loaded on it, while there is signal.</p>
-      {/* A whole page: the crew's shell is its own, kept for when there is no network. */}
-      <a className={buttonClass('primary', 'large')} href={isMarshal ? '/pit-exit' : '/bay'}>
+      <HardLink className={buttonClass('primary', 'large')} href={isMarshal ? '/pit-exit' : '/bay'}>
         {isMarshal ? 'To the pit exit' : 'To the bay'}
-      </a>
+      </HardLink>
     </div>
   )
 }
