@@ -11,7 +11,7 @@ const FOLDED: Readonly<Record<string, string>> = { ß: 'SS', Ø: 'O', Æ: 'AE', 
 
 /** Upper case, each letter its base letter (Ö → O), anything else outside the alphabet dropped, cut to six. */
 export function foldToBase40(text: string): string {
-  const upper = [...text.toUpperCase()].map((letter) => FOLDED[letter] ?? letter).join('')
+  const upper = Array.from(text.toUpperCase(), (letter) => FOLDED[letter] ?? letter).join('')
   const base = upper.normalize('NFD').replace(/[^A-Z0-9./-]/g, '')
   return base.slice(0, BASE40_LENGTH)
 }

@@ -1,10 +1,9 @@
-import { applicableChecks } from '@/lib/checklist/applicable-checks'
 import type { Book } from '@/lib/checklist/book'
 import type { CarFacts } from '@/lib/checklist/car-facts'
 import type { Block, KillReason, PassState, SubjectState, Verdict } from '@/lib/inspection/state'
 import { subjectKey, type SubjectKey } from '@/lib/inspection/subject'
-import { addDays, civilDate } from '@/lib/rules/civil-date'
-import type { ListedBlock, ListedEntry, ListedKey, ListedPass, ListedPerson, PassList } from './pass-list'
+import { listPerson } from './list-person'
+import { CHIEF_ONLY, type ListedBlock, type ListedEntry, type ListedKey, type ListedPass, type PassList } from './pass-list'
 import { passId } from './pass-payload'
 import { decodeToken } from './token'
 import { typedCode } from './typed-code'
@@ -63,13 +62,18 @@ export function listEntry(entry: EntryForList, input: Pick<PassListInput, 'state
     verdict,
     blocks: [...(verdict === 'withdrawn' ? [WITHDRAWN] : []), ...(state ? blocksOf(state, input.book) : [])],
     passes: (state?.passes ?? []).flatMap((pass) => listPass(pass)),
-    people: entry.people.map(({ person, role }) => listPerson(entry, person, role, input)),
+    people: entry.people.map(({ person, role }) => {
+      const own = input.states.get(subjectKey({ person })) ?? null
+      const fit = input.states.get(subjectKey({ fit: entry.id, person })) ?? null
+      const name = input.names.get(person) ?? 'somebody without a name'
+      return listPerson({ person, role, name, state: own, blocks: own ? blocksOf(own, input.book) : [], fit }, entry.facts, input)
+    }),
   }
 }
 
 const WITHDRAWN: ListedBlock = { kind: 'withdrawn', words: 'withdrawn', seeAgain: [], at: null, stickerRemoved: null }
 
-/** Holds, due recalls and fails of a subject in words, newest first. */
+/** Holds, due recalls, wet switches, unknown stops and fails of a subject in words, newest first. */
 export function blocksOf(state: SubjectState, book: Book | null): readonly ListedBlock[] {
   const fails = state.fails.map((check): ListedBlock => {
     const head = state.checks.get(check)?.heads.find(({ outcome }) => outcome === 'fail')
@@ -79,10 +83,24 @@ export function blocksOf(state: SubjectState, book: Book | null): readonly Liste
 }
 
 function listBlock(block: Block, book: Book | null): ListedBlock {
-  const words = book?.checklist.holdReasons.find(({ id }) => id === block.reason)?.text ?? block.reason.replace(/-/g, ' ')
+  const words = blockWords(block, book)
   const stations = new Set([...block.stations, ...block.checksLeft.flatMap((check) => book?.byId.get(check)?.station ?? [])])
-  const seeAgain = block.onlyChiefLifts ? ['only the chief lifts it'] : [...stations].map((id) => book?.stations.get(id)?.title ?? id)
+  const seeAgain = block.onlyChiefLifts ? [CHIEF_ONLY] : [...stations].map((id) => book?.stations.get(id)?.title ?? id)
   return { kind: block.kind, words, seeAgain, at: block.at, stickerRemoved: block.stickerRemoved }
+}
+
+function blockWords({ kind, reason }: Block, book: Book | null): string {
+  if (kind === 'recall') return RECALL_WORDS[reason] ?? 'recall due'
+  if (kind === 'unknown') return `stopped by a newer version of Lockwire (${reason})`
+  return book?.checklist.holdReasons.find(({ id }) => id === reason)?.text ?? reason.replace(/-/g, ' ')
+}
+
+/** A due recall by its trigger. */
+const RECALL_WORDS: Readonly<Record<string, string>> = {
+  'session-over': 'recall due: to be shown after its session',
+  time: 'recall due: its time has come',
+  wet: 'recall due: it is wet',
+  passenger: 'recall due: a passenger rides along',
 }
 
 function failWords(check: string, record: { readonly kind: string; readonly reason?: unknown } | undefined, book: Book | null): string {
@@ -98,10 +116,19 @@ function listPass(pass: PassState): readonly ListedPass[] {
   // A record whose token cannot be read names no pass; the record itself stays in the log.
   if (!decoded.ok) return []
   const { payload } = decoded.token
-  const { validFrom, days } = payload
-  const why = pass.killedBy.map(({ reason }) => KILL_WORDS[reason])[0] ?? ''
+  const { validFrom, days, passengerSeatUsable } = payload
+  const why = [...new Set(pass.killedBy.map(({ reason }) => KILL_WORDS[reason]))].join('; ')
   return [
-    { id: passId(payload), typedCode: typedCode(pass.record.token), state: pass.state, why, validFrom, days, conditions: pass.conditions },
+    {
+      id: passId(payload),
+      typedCode: typedCode(pass.record.token),
+      state: pass.state,
+      why,
+      validFrom,
+      days,
+      conditions: pass.conditions,
+      passengerSeatUsable,
+    },
   ]
 }
 
@@ -117,57 +144,4 @@ export const KILL_WORDS: Readonly<Record<KillReason, string>> = {
   void: 'declared void',
   replaced: 'replaced by a newer one',
   withdrawn: 'the entry was withdrawn',
-}
-
-function listPerson(
-  entry: EntryForList,
-  person: string,
-  role: ListedPerson['role'],
-  { states, names, book, day }: Pick<PassListInput, 'states' | 'names' | 'book' | 'day'>,
-): ListedPerson {
-  const state = states.get(subjectKey({ person })) ?? null
-  const fitState = states.get(subjectKey({ fit: entry.id, person })) ?? null
-  const bands = (state?.passes ?? []).filter((pass) => pass.record.kind === 'band')
-  const live = bands.findLast((pass) => pass.state === 'live' && coversDay(pass, day))
-  const blocks = state ? blocksOf(state, book) : []
-  const band = !live ? (bands.length > 0 ? 'dead' : 'none') : blocks.length > 0 ? 'held' : 'live'
-  const fit = fitOf(fitState, entry, book)
-  const last = live ?? bands.at(-1)
-  return {
-    person,
-    name: names.get(person) ?? 'somebody without a name',
-    role,
-    bandNumber: last?.record.kind === 'band' ? last.record.bandNumber : null,
-    band,
-    why:
-      band === 'live'
-        ? fit === 'failed'
-          ? 'does not fit this car'
-          : fit === 'open'
-            ? 'fit in this car not seen'
-            : ''
-        : whyNoBand(band, blocks),
-    fit,
-  }
-}
-
-function whyNoBand(band: Exclude<ListedPerson['band'], 'live'>, blocks: readonly ListedBlock[]): string {
-  const words = blocks.map((block) => block.words).join(', ')
-  if (band === 'none') return words ? `no band: ${words}` : 'no band yet'
-  return band === 'held' ? `held: ${words}` : words ? `band is dead: ${words}` : 'band is dead: to be seen again'
-}
-
-function coversDay(pass: PassState, day: string): boolean {
-  const decoded = decodeToken(pass.record.token)
-  if (!decoded.ok) return false
-  const { validFrom, days } = decoded.token.payload
-  return validFrom <= day && day < addDays(civilDate(validFrom), days)
-}
-
-function fitOf(state: SubjectState | null, entry: EntryForList, book: Book | null): ListedPerson['fit'] {
-  if (state && state.fails.length > 0) return 'failed'
-  if (state && (state.verdict === 'passed' || state.verdict === 'passed with advisories')) return 'passed'
-  if (state && state.blocks.length > 0) return 'open'
-  if (book === null) return 'open'
-  return applicableChecks(book, 'fit', entry.facts).some((check) => check.required) ? 'open' : 'not-asked'
 }

@@ -35,11 +35,14 @@ export interface ListedEntry {
   readonly people: readonly ListedPerson[]
 }
 
+/** Stands in `seeAgain` of a block that nothing seen again ends. */
+export const CHIEF_ONLY = 'only the chief lifts it'
+
 export interface ListedBlock {
   readonly kind: 'withdrawn' | 'hold' | 'recall' | 'fail' | 'wet' | 'unknown' | 'verdict'
   /** `fluid dropped`, `shoulder straps: too steep`. */
   readonly words: string
-  /** What is to be seen again, by station title. */
+  /** What is to be seen again, by station title; `CHIEF_ONLY` alone where no look ends it. */
   readonly seeAgain: readonly string[]
   readonly at: number | null
   readonly stickerRemoved: boolean | null
@@ -53,6 +56,7 @@ export interface ListedPass {
   readonly validFrom: string
   readonly days: number
   readonly conditions: readonly string[]
+  readonly passengerSeatUsable: boolean
 }
 
 export interface ListedPerson {
@@ -70,6 +74,7 @@ export interface ListedKey {
   readonly kid: number
   /** Raw Ed25519 public key, base64url. */
   readonly publicKey: string
+  /** Whether this device was ever allowed to issue passes; bands are no business of the pit exit's scanner. */
   readonly mayIssue: boolean
   readonly state: 'active' | 'retired' | 'lost'
 }

@@ -1,28 +1,38 @@
 import type { ListedEntry, ListedPerson } from './pass-list'
+import type { PitPerson } from './pit-answer'
+import type { PitBlock } from './pit-device'
 
-/** A person named for a car, and whether they may go out in it. */
-export interface PersonAboard {
-  readonly name: string
-  readonly bandNumber: string | null
-  readonly drives: boolean
-  readonly may: boolean
-  /** Why not; empty when they may. */
-  readonly why: string
-}
-
-/** Who is named for the car, and who of them may go (rule P8): a live band, and the fit passed where it is asked. */
-export function peopleAboard(entry: ListedEntry): readonly PersonAboard[] {
+/**
+ * Who is named for the car, and who of them may go (rule P8): a live band, the fit passed where it is asked, and no block of this device.
+ * Only who is named as a driver drives: an instructor rides.
+ */
+export function peopleAboard(entry: ListedEntry, blocks: readonly PitBlock[]): readonly PitPerson[] {
   return entry.people.map((person) => {
-    const why = whyNot(person)
-    return { name: person.name, bandNumber: person.bandNumber, drives: person.role !== 'passenger', may: why === '', why }
+    const block = blocks.find(({ about }) => 'person' in about && about.person === person.person)
+    const why = block?.words ?? whyNot(person)
+    const { name, bandNumber, role } = person
+    return { person: person.person, name, bandNumber, drives: role === 'driver', may: why === '', why }
   })
 }
 
 function whyNot({ band, fit, why }: ListedPerson): string {
-  if (band === 'none') return why || 'no band'
-  if (band === 'dead') return why || 'band is dead'
-  if (band === 'held') return why || 'held'
-  if (fit === 'failed') return why || 'does not fit this car'
-  if (fit === 'open') return why || 'fit in this car not seen'
-  return ''
+  switch (band) {
+    case 'live':
+      return fit === 'passed' || fit === 'not-asked' ? '' : why || FIT_WORDS[fit]
+    case 'none':
+    case 'dead':
+    case 'held':
+      return why || BAND_WORDS[band]
+    default:
+      // A list of a newer build: a state this one does not know lets nobody go.
+      return 'this device does not know the state of this band'
+  }
+}
+
+const BAND_WORDS = { none: 'no band', dead: 'band is dead', held: 'held' } as const
+const FIT_WORDS = { failed: 'does not fit this car', open: 'fit in this car not seen' } as const
+
+/** `Ana Brand (band 112)`. */
+export function nameWithBand({ name, bandNumber }: Pick<PitPerson, 'name' | 'bandNumber'>): string {
+  return bandNumber === null ? name : `${name} (band ${bandNumber})`
 }

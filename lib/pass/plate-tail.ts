@@ -5,7 +5,12 @@ export const PLATE_TAIL_LENGTH = 5
 
 /** The end of a plate as the pass carries it: `GF90 VGN` → `90VGN`. */
 export function plateTail(plate: string): string {
-  return foldToBase40Long(plate).slice(-PLATE_TAIL_LENGTH)
+  return foldAll(plate).slice(-PLATE_TAIL_LENGTH)
+}
+
+/** A tail as it is shown: `…90VGN`; empty where there is none. */
+export function showTail(tail: string): string {
+  return tail === '' ? '' : `…${tail}`
 }
 
 /** A number as the pass carries it. */
@@ -13,7 +18,7 @@ export function passNumber(number: string): string {
   return foldToBase40(number)
 }
 
-// foldToBase40 cuts at the front six characters; a tail wants the last ones.
-function foldToBase40Long(plate: string): string {
-  return [...plate.replace(/[\s./-]/g, '')].map((letter) => foldToBase40(letter)).join('')
+// `foldToBase40` keeps the first six characters; a tail is the last ones.
+function foldAll(plate: string): string {
+  return Array.from(plate.replace(/[\s./-]/g, ''), foldToBase40).join('')
 }

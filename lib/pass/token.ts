@@ -53,7 +53,7 @@ export function encodePayload(payload: PassPayload): Uint8Array<ArrayBuffer> {
   requireRange('entry', payload.entry, 0, 65_535)
   requireRange('validFrom', since, 0, 65_535)
   requireRange('days', payload.days, 1, 7)
-  if (payload.type === 'band' && (payload.entry !== 0 || payload.plateTail !== '')) throw new Error('a band has no entry and no plate')
+  if (payload.type === 'band' && !isBand(payload)) throw new Error('a band has a number, and no entry and no plate')
   const bytes = new Uint8Array(PAYLOAD_BYTES)
   const view = new DataView(bytes.buffer)
   view.setUint8(0, (VERSION << 4) | TYPES[payload.type])
@@ -110,10 +110,10 @@ function readPayload(bytes: Uint8Array<ArrayBuffer>): PassPayload | TokenProblem
   if (daysAndFlags >>> 5 === 0) return 'no-days'
   const number = unpackBase40(view.getUint32(11))
   const plateTail = unpackBase40(view.getUint32(15))
-  if (number === null || number === '') return 'impossible-number'
+  if (number === null) return 'impossible-number'
   if (plateTail === null) return 'impossible-plate'
   const entry = view.getUint16(6)
-  if (type === 'band' && (entry !== 0 || plateTail !== '')) return 'impossible-band'
+  if (type === 'band' && !isBand({ entry, number, plateTail })) return 'impossible-band'
   return {
     type,
     kid: view.getUint8(1),
@@ -128,6 +128,10 @@ function readPayload(bytes: Uint8Array<ArrayBuffer>): PassPayload | TokenProblem
     number,
     plateTail,
   }
+}
+
+function isBand({ entry, number, plateTail }: Pick<PassPayload, 'entry' | 'number' | 'plateTail'>): boolean {
+  return entry === 0 && plateTail === '' && number !== ''
 }
 
 function flagsOf(payload: PassPayload): number {

@@ -4,6 +4,7 @@ import { sha256 } from '@noble/hashes/sha2.js'
 const ALPHABET = '0123456789ABCDEFGHJKMNPQRSTVWXYZ'
 const DATA_LENGTH = 7
 export const TYPED_CODE_LENGTH = DATA_LENGTH + 1
+const MOST_TYPED = 100
 
 /**
  * The code to type where no camera helps: eight signs from the SHA-256 of the token, the last a check sign. It proves nothing; it only
@@ -22,13 +23,31 @@ export function showTypedCode(code: string): string {
   return `${code.slice(0, 4)}-${code.slice(4)}`
 }
 
-/** Reads what was typed: any case, spaces and hyphens, O for 0 and I or L for 1. Null where a sign is wrong, missing or swapped. */
+export type TypedCodeProblem = 'too-short' | 'too-long' | 'not-a-sign' | 'check-sign'
+
+/** Reads what was typed: any case, spaces and hyphens of any sort, O for 0 and I or L for 1; or what is wrong with it. */
+export function readTypedCode(
+  text: string,
+): { readonly ok: true; readonly code: string } | { readonly ok: false; readonly problem: TypedCodeProblem } {
+  // Cut before anything else: what was pasted may be a book.
+  const signs = text
+    .slice(0, MOST_TYPED)
+    .replace(/[\s\u2010-\u2015-]/g, '')
+    .toUpperCase()
+    .replace(/O/g, '0')
+    .replace(/[IL]/g, '1')
+  const values = Array.from(signs, (sign) => ALPHABET.indexOf(sign))
+  if (values.includes(-1)) return { ok: false, problem: 'not-a-sign' }
+  if (values.length < TYPED_CODE_LENGTH) return { ok: false, problem: 'too-short' }
+  if (values.length > TYPED_CODE_LENGTH) return { ok: false, problem: 'too-long' }
+  const isRight = checkSign(values.slice(0, DATA_LENGTH)) === values[DATA_LENGTH]
+  return isRight ? { ok: true, code: signs } : { ok: false, problem: 'check-sign' }
+}
+
+/** As `readTypedCode`, where only a whole code is of use. */
 export function parseTypedCode(text: string): string | null {
-  const signs = text.toUpperCase().replace(/[\s-]/g, '').replace(/O/g, '0').replace(/[IL]/g, '1')
-  if (signs.length !== TYPED_CODE_LENGTH) return null
-  const values = [...signs].map((sign) => ALPHABET.indexOf(sign))
-  if (values.includes(-1)) return null
-  return checkSign(values.slice(0, DATA_LENGTH)) === values[DATA_LENGTH] ? signs : null
+  const read = readTypedCode(text)
+  return read.ok ? read.code : null
 }
 
 /**
