@@ -27,10 +27,10 @@ export function AnswerScreen({ state, word, number, lines, foot }: AnswerScreenP
       data-slot="answer-screen"
       data-state={state}
       aria-live="assertive"
-      className={`focus-on-fill flex grow flex-col gap-3 p-5 ${FILLS[state]}`}
+      className={`focus-on-fill flex grow flex-col gap-3 px-4 py-5 ${FILLS[state]}`}
     >
-      <p className="flex items-center gap-4">
-        <OutcomeShape state={state} tone="inverse" className="size-[76px]" />
+      <p className="flex items-center gap-3">
+        <OutcomeShape state={state} tone="inverse" className="size-16 sm:size-20" />
         <span className="figures text-6xl">{word}</span>
       </p>
       <NumberPlate number={number} size="answer" className="py-2" />

@@ -9,10 +9,11 @@ export interface NumberPlateProps {
   readonly className?: string
 }
 
-/** The number of a car, condensed and heavy, its figures all of one width. */
+/** The number of a car, condensed and heavy, its figures all of one width. Four figures and more stand a size smaller in an answer: a phone must hold them. */
 export function NumberPlate({ number, size = 'head', className }: NumberPlateProps) {
+  const isLong = size === 'answer' && number.length > 3
   return (
-    <span data-slot="number-plate" className={classNames('figures inline-block', SIZES[size], className)}>
+    <span data-slot="number-plate" className={classNames('figures inline-block', isLong ? 'text-8xl' : SIZES[size], className)}>
       {number}
     </span>
   )

@@ -31,7 +31,7 @@ export function ScreensSample() {
             <AnswerScreen {...answer} />
             <div className="border-t px-4 py-3">
               held now
-              <p className="figures flex gap-6 text-6xl">
+              <p className="figures flex flex-wrap gap-x-6 gap-y-2 text-6xl">
                 <span>47</span>
                 <span>103</span>
                 <span>311</span>
