@@ -20,19 +20,11 @@ export function CarScreen({ entry, rest }: CarScreenProps) {
   const day = useDay()
   const base = `/bay/car/${entry.id}`
   const person = rest[0] === 'person' ? (rest[1] ?? null) : null
+  const place = (person === null ? rest[0] : rest[2]) ?? null
   const names = new Map(day.snapshot()?.people.map(({ id, name }) => [id, name]))
   return (
     <div className="flex grow flex-col">
-      <header className="flex items-end gap-4 border-b border-line px-4 py-3">
-        <p className="figures text-7xl">{entry.number}</p>
-        <div>
-          <p className="text-lg font-bold">{entry.model}</p>
-          <p>
-            {entry.colour} · {entry.plate}
-          </p>
-          <p>{entry.groupName}</p>
-        </div>
-      </header>
+      <CarHeader entry={entry} isCompact={place !== null} />
       <nav aria-label="Car and people" className="flex gap-2 overflow-x-auto border-b border-line px-4">
         <Tab label="Car" isHere={person === null} to={base} />
         {entry.people.map(({ person: id, role }) => (
@@ -44,15 +36,17 @@ export function CarScreen({ entry, rest }: CarScreenProps) {
           />
         ))}
       </nav>
-      {entry.note !== '' && person === null && <p className="border-l-4 border-accent px-4 py-2">Said on the entry: {entry.note}</p>}
+      {entry.note !== '' && person === null && place === null && (
+        <p className="border-l-4 border-accent px-4 py-2">Said on the entry: {entry.note}</p>
+      )}
       {person === null ? (
-        <WalkOrPlace key={entry.id} subject={{ car: entry.id }} base={base} place={rest[0] ?? null} told={entry.facts} />
+        <WalkOrPlace key={entry.id} subject={{ car: entry.id }} base={base} place={place} told={entry.facts} />
       ) : (
         <WalkOrPlace
           key={person}
           subject={{ person }}
           base={`${base}/person/${person}`}
-          place={rest[2] ?? null}
+          place={place}
           told={toldOfPerson(day.state(`car:${entry.id}`).presentedHeads[0]?.record.facts.roof)}
         />
       )}
@@ -62,6 +56,28 @@ export function CarScreen({ entry, rest }: CarScreenProps) {
         </Button>
       </div>
     </div>
+  )
+}
+
+/** Which car this is. At a place of the walk it makes room for what is asked there; the number stays the largest thing. */
+function CarHeader({ entry, isCompact }: { readonly entry: DayEntry; readonly isCompact: boolean }) {
+  return (
+    <header className={`flex items-end gap-4 border-b border-line px-4 ${isCompact ? 'py-2' : 'py-3'}`}>
+      <h1 className={`figures ${isCompact ? 'text-5xl' : 'text-7xl'}`}>{entry.number}</h1>
+      {isCompact ? (
+        <p className="min-w-0 truncate">
+          {entry.plate} · {entry.colour} {entry.model}
+        </p>
+      ) : (
+        <div>
+          <p className="text-lg font-bold">{entry.model}</p>
+          <p>
+            {entry.colour} · {entry.plate}
+          </p>
+          <p>{entry.groupName}</p>
+        </div>
+      )}
+    </header>
   )
 }
 

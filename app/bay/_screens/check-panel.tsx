@@ -60,12 +60,12 @@ export function CheckPanel({ item, facts, lastDay, typed, onTyped, onAnswer, bus
 
   return (
     <section className="flex grow flex-col" aria-labelledby="check-prompt">
-      <h2 id="check-prompt" className="mt-2 text-xl">
+      <h3 id="check-prompt" className="mt-2 text-xl">
         {check.prompt}
-      </h2>
+      </h3>
       <p className="mt-2 text-muted">{check.how}</p>
       {found && <p className="mt-3 border-l-4 border-accent pl-3 font-bold">Put right here: take it anew as it is now.</p>}
-      {check.measure && <MeasureFields fields={check.measure} typed={typed} onTyped={onTyped} />}
+      {check.measure && <MeasureFields fields={check.measure} typed={typed} onTyped={onTyped} judgement={judgement} />}
       {read.problems.map((problem) => (
         <p key={problem.field} role="alert" className="mt-2 font-bold">
           {problem.why}

@@ -38,12 +38,12 @@ export function PlaceScreen({ walk, here, base }: PlaceScreenProps) {
 
   return (
     <div className="flex grow flex-col px-4 pb-4">
-      <h1 ref={heading} tabIndex={-1} className="pt-3 text-base text-muted outline-none">
+      <h2 ref={heading} tabIndex={-1} className="pt-3 text-base text-muted outline-none">
         {here.place.title} · {position} of {count}
         {item?.check.critical ? ' · no-go item' : ''}
         {item?.seeAgain ? ' · see again' : ''}
-      </h1>
-      <p className="text-muted">{here.place.stand}</p>
+      </h2>
+      {position === 1 && <p className="text-muted">{here.place.stand}</p>}
       <StopPicker here={here} stop={stop} onPick={now.moveTo} />
       <ProblemNotice problem={now.problem} className="mt-3" />
       {item ? (
