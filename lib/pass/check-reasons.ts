@@ -1,3 +1,4 @@
+import { isStale, listAge } from './list-age'
 import type { PitReason } from './pit-answer'
 import { ANY_GROUP, type PitDevice } from './pit-device'
 import type { PitFound } from './pit-found'
@@ -15,9 +16,8 @@ const ASK = 'Ask on the radio: list, holds?'
 
 function ofList({ list }: PitFound, device: PitDevice): readonly PitReason[] {
   const reasons: PitReason[] = []
-  const age = device.now - Math.max(list.at, device.readBackAt ?? 0)
-  // Asked the other way round, a limit or an instant that is no number would make any list a fresh one.
-  if (!(age <= device.listStaleMinutes * 60_000)) {
+  const age = listAge(list, device)
+  if (isStale(list, device)) {
     const minutes = Math.floor(age / 60_000)
     const old = Number.isFinite(minutes) ? `List ${list.version} is ${minutes} min old.` : `How old list ${list.version} is cannot be told.`
     reasons.push({ code: 'list-stale', why: [old], todo: ASK })
