@@ -11,11 +11,11 @@ export function encodeBase32(bytes: Uint8Array): string {
     bits += 8
     while (bits >= 5) {
       bits -= 5
-      text += ALPHABET[(buffer >>> bits) & 31]
+      text += ALPHABET.charAt((buffer >>> bits) & 31)
     }
     buffer &= (1 << bits) - 1
   }
-  return bits > 0 ? text + ALPHABET[(buffer << (5 - bits)) & 31] : text
+  return bits > 0 ? text + ALPHABET.charAt((buffer << (5 - bits)) & 31) : text
 }
 
 /**
