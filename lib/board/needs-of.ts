@@ -89,7 +89,10 @@ function seeAgain(stations: readonly string[], checksLeft: readonly string[], bo
   const stationOf = (check: string) => book?.byId.get(check)?.station ?? ''
   const touched = stations.filter((station) => checksLeft.length === 0 || checksLeft.some((check) => stationOf(check) === station))
   const others = checksLeft.filter((check) => !touched.includes(stationOf(check)))
-  return nameSome([...touched.map((id) => book?.stations.get(id)?.short ?? id), ...others.map((id) => book?.byId.get(id)?.short ?? id)])
+  return nameSome([
+    ...touched.map((id) => inASentence(book?.stations.get(id)?.short ?? id)),
+    ...others.map((id) => book?.byId.get(id)?.short ?? id),
+  ])
 }
 
 /** `Fluid dropped` as it stands within a sentence. */
