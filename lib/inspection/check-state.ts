@@ -26,7 +26,7 @@ export function checkState(
   const isPerishable = definitions.length === 0 || definitions.some((definition) => !definition.standing)
   const shown = (heads?.heads ?? []).map((line) => toHead(line, heads as CheckHeads, isPerishable, context.day))
   const counting = shown.filter((head) => !head.lapsed)
-  const answered = answeredBy(heads, shown)
+  const answered = asked.demands.length + asked.repairs.length === 0 ? NOTHING : answeredBy(heads, shown)
   const openRepairs = asked.repairs.map(({ hash }) => hash).filter((hash) => !answered.has(hash))
   const openDemands = asked.demands.filter(({ hash, isLifted }) => !isLifted && !answered.has(hash)).map(({ hash }) => hash)
   return {
@@ -41,6 +41,8 @@ export function checkState(
     dispensation: dispensationOf(counting),
   }
 }
+
+const NOTHING: ReadonlySet<string> = new Set()
 
 function answeredBy(heads: CheckHeads | undefined, shown: readonly Head[]): ReadonlySet<string> {
   const answered = new Set<string>()

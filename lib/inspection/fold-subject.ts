@@ -107,8 +107,13 @@ function isSeenFor(hash: string, check: CheckState | undefined): boolean {
 /** What a standing demand names is required, whatever the depth; one that has ended asks nothing more. */
 function withRequired(checks: ReadonlyMap<string, CheckState>, standing: readonly Demand[]): ReadonlyMap<string, CheckState> {
   const named = new Set(standing.flatMap((demand) => demand.checks))
-  const isRequired = ({ check, required, standing }: CheckState) => required || (named.has(check) && standing !== 'does-not-apply')
-  return new Map([...checks].map(([id, check]) => [id, { ...check, required: isRequired(check) }]))
+  const becoming = [...checks.values()].filter(
+    ({ check, required, standing }) => !required && named.has(check) && standing !== 'does-not-apply',
+  )
+  if (becoming.length === 0) return checks
+  const all = new Map(checks)
+  for (const check of becoming) all.set(check.check, { ...check, required: true })
+  return all
 }
 
 function toBlock(demand: Demand, checks: ReadonlyMap<string, CheckState>): Block {

@@ -14,8 +14,20 @@ export interface CheckHeads {
   readonly takenBack: ReadonlySet<CheckLine>
 }
 
+const NO_EDGES: CheckHeads['edges'] = new Map()
+const NOBODY: ReadonlySet<CheckLine> = new Set()
+
 /** Works out the heads of one check: the lines with effect that no other replaces (rules F1, F2, F4). */
 export function headsOf(group: CheckGroup, days: Days): CheckHeads {
+  // Most checks of a day have one line and so no edge: a fold of a whole event should not make three collections for each of them.
+  if (group.lines.length === 1)
+    return {
+      group,
+      heads: group.lines.filter((line) => hasEffect(line, NO_EDGES, days)),
+      edges: NO_EDGES,
+      superseded: NOBODY,
+      takenBack: NOBODY,
+    }
   const edges = edgesIn(group)
   const takenBack = takenBackIn(group)
   const superseded = new Set<CheckLine>()

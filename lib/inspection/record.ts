@@ -258,7 +258,10 @@ export interface UnknownRecord {
 
 export type AnyRecord = KnownRecord | UnknownRecord
 
+// Asked for every record of every fold: a set answers faster than an object of schemas.
+const KNOWN_KINDS: ReadonlySet<string> = new Set(Object.keys(RECORD_KINDS))
+
 /** Whether this build knows the record's kind and version. */
 export function isKnown(record: AnyRecord): record is KnownRecord {
-  return record.v === RECORD_VERSION && Object.hasOwn(RECORD_KINDS, record.kind)
+  return record.v === RECORD_VERSION && KNOWN_KINDS.has(record.kind)
 }
