@@ -10,6 +10,7 @@ const PURE = [
   'lib/pass/**',
   'lib/planning/**',
   'lib/permissions/**',
+  'lib/walk/**',
   'lib/sync/core/**',
 ]
 
@@ -31,6 +32,8 @@ export default tseslint.config(
   ...next,
   { plugins: { house: houseRules }, rules: { 'house/file-name': 'error', 'house/disable-needs-reason': 'error' } },
   {
+    // What eslint-config-next brings its plugins for; a .cjs of a tool is none of it.
+    files: ['**/*.{ts,tsx,js,jsx,mjs}'],
     rules: {
       'no-eval': 'error',
       eqeqeq: 'error',
