@@ -2,7 +2,7 @@ import fc from 'fast-check'
 import type { PassPayload } from '@/lib/pass/pass-payload'
 import { addDays, civilDate } from '@/lib/rules/civil-date'
 
-const short = fc.string({ unit: fc.constantFrom(...'ABCDEFGHIJKLMNOPQRSTUVWXYZ0123456789-./'), maxLength: 6 })
+const short = fc.string({ unit: fc.constantFrom(...Array.from('ABCDEFGHIJKLMNOPQRSTUVWXYZ0123456789-./')), maxLength: 6 })
 const u16 = fc.integer({ min: 0, max: 65_535 })
 
 /** Any payload that a token can carry. */

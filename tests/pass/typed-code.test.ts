@@ -32,7 +32,7 @@ describe('[P7] the typed code', () => {
       for (let left = 0; left < 7; left += 1)
         for (let right = left + 1; right < 8; right += 1) {
           if (one[left] === one[right]) continue
-          const signs = [...one]
+          const signs = Array.from(one)
           ;[signs[left], signs[right]] = [one.charAt(right), one.charAt(left)]
           expect(parseTypedCode(signs.join(''))).toBeNull()
         }
@@ -42,7 +42,7 @@ describe('[P7] the typed code', () => {
     const ways = (one: string) => [
       one.toLowerCase(),
       showTypedCode(one),
-      [...one].join(' '),
+      Array.from(one).join(' '),
       `${one.slice(0, 4)}–${one.slice(4)}`,
       one.replaceAll('0', 'O').replaceAll('1', 'l'),
       one.replaceAll('0', 'o').replaceAll('1', 'I'),
