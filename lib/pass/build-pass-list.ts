@@ -61,7 +61,7 @@ export function listEntry(entry: EntryForList, input: Pick<PassListInput, 'state
     groupName: entry.groupName,
     verdict,
     blocks: [...(verdict === 'withdrawn' ? [WITHDRAWN] : []), ...(state ? blocksOf(state, input.book) : [])],
-    passes: (state?.passes ?? []).flatMap((pass) => listPass(pass)),
+    passes: (state?.passes ?? []).flatMap((pass) => listPass(pass, entry.code)),
     people: entry.people.map(({ person, role }) => {
       const own = input.states.get(subjectKey({ person })) ?? null
       const fit = input.states.get(subjectKey({ fit: entry.id, person })) ?? null
@@ -110,11 +110,11 @@ function failWords(check: string, record: { readonly kind: string; readonly reas
   return reason ? `${name}: ${reason.toLowerCase()}` : `${name} failed`
 }
 
-function listPass(pass: PassState): readonly ListedPass[] {
+function listPass(pass: PassState, entry: number): readonly ListedPass[] {
   if (pass.record.kind !== 'pass') return []
   const decoded = decodeToken(pass.record.token)
-  // A record whose token cannot be read names no pass; the record itself stays in the log.
-  if (!decoded.ok) return []
+  // A record whose token cannot be read, or is of another car, names no pass of this one; the record itself stays in the log.
+  if (!decoded.ok || decoded.token.payload.type !== 'pass' || decoded.token.payload.entry !== entry) return []
   const { payload } = decoded.token
   const { validFrom, days, passengerSeatUsable } = payload
   const why = [...new Set(pass.killedBy.map(({ reason }) => KILL_WORDS[reason]))].join('; ')

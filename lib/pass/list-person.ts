@@ -53,7 +53,7 @@ function whyNoBand({ state, blocks }: PersonForList, band: Exclude<ListedPerson[
 
 function coversDay({ record }: PassState, day: string): boolean {
   const decoded = decodeToken(record.token)
-  return decoded.ok && isValidOn(decoded.token.payload, day)
+  return decoded.ok && decoded.token.payload.type === 'band' && isValidOn(decoded.token.payload, day)
 }
 
 function fitOf(state: SubjectState | null, facts: CarFacts, book: Book | null): ListedPerson['fit'] {

@@ -54,8 +54,9 @@ describe('a car on the pass list', () => {
     ])
   })
 
-  test('leaves out a record whose token is none', () => {
-    expect(only([presented(), pass()])?.passes).toEqual([])
+  test('leaves out a record whose token is none, is of another car, or is a band’s', () => {
+    const band = signedPass({}, { type: 'band', entry: 0, number: '112', plateTail: '' })
+    expect(only([presented(), pass(), signedPass({}, { entry: 6 }), band])?.passes).toEqual([])
   })
 
   test('says all that killed a pass, each once', () => {
@@ -164,6 +165,11 @@ describe('[P8] a person on the pass list', () => {
 
   test('a band of Saturday lets nobody go on Sunday', () => {
     expect(person([seated, seen, banded], { day: SUNDAY })).toMatchObject({ band: 'dead', why: 'band is of another day' })
+  })
+
+  test('a band record that carries a car’s token bands nobody', () => {
+    const wrong = { ...banded, record: { ...banded.record, token: aToken() } as never }
+    expect(person([seated, seen, wrong, ...sits])).toMatchObject({ band: 'dead' })
   })
 
   test('a fit that no check asks for is not asked', () => {

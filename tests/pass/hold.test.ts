@@ -110,6 +110,11 @@ describe('[P2] a pass under a number that the list gives to another', () => {
     const list = aList([anEntry(), anEntry({ entry: 'entry-6', code: 6, number: '48', passes: [] })])
     expect(await scan(aToken({ entry: 6, number: '48' }), list)).toMatchObject({ answer: 'HOLD', code: 'pass-differs' })
   })
+
+  test('is HOLD where the very same code is listed under another car than it names', async () => {
+    const list = aList([anEntry({ passes: [] }), anEntry({ entry: 'entry-6', code: 6, number: '48', passes: [aPass()] })])
+    expect(await scan(aToken(), list)).toMatchObject({ answer: 'HOLD', code: 'pass-differs' })
+  })
 })
 
 test('[P2] without a list nothing is known of any key, and every code is HOLD', async () => {
