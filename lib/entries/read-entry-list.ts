@@ -19,8 +19,13 @@ export interface EntryList {
  * a row with a problem is not among `rows`. Numbers and plates that stand twice are problems: whether that is a shared car is asked, never guessed.
  */
 export function readEntryList(text: string): EntryList {
-  const parsed = Papa.parse<string[]>(text.replace(/^\uFEFF/, ''), { skipEmptyLines: 'greedy' })
-  const [headings, ...lines] = parsed.data
+  // One row added in another program ends otherwise than those above it, and would run into its neighbour.
+  const parsed = Papa.parse<string[]>(text.replace(/^\uFEFF/, '').replace(/\r\n?/g, '\n'))
+  // Empty rows are left out only once each row knows its place: a problem must name the row that a spreadsheet shows.
+  const [heading, ...lines] = parsed.data
+    .map((cells, index) => ({ row: index + 1, cells }))
+    .filter(({ cells }) => cells.some((cell) => cell.trim() !== ''))
+  const headings = heading?.cells
   if (!headings)
     return empty([
       { row: 1, column: '', value: '', why: 'The file is empty. Choose the entry list as a CSV file with a line of headings.' },
@@ -49,8 +54,7 @@ export function readEntryList(text: string): EntryList {
 
   const rows: EntryRow[] = []
   const problems: RowProblem[] = []
-  lines.forEach((cells, index) => {
-    const row = index + 2
+  lines.forEach(({ row, cells }) => {
     if (cells.length > headings.length && cells.slice(headings.length).some((cell) => cell.trim() !== '')) {
       problems.push({
         row,

@@ -27,6 +27,25 @@ describe('reading a list', () => {
     expect(list.rows.map((row) => row.number)).toEqual(['7', '007'])
   })
 
+  test('a problem names the row that the spreadsheet shows, with empty rows and broken lines above it', () => {
+    const broken = LINE.replace('7,', ',').replace('gf90 vgn', 'gf91 vgn')
+    const list = readEntryList(`\n${HEAD}\n\n${LINE.replace('quiet', '"quiet\non tyres"')}\n,,,,,,,,,,\n${broken}\n`)
+    expect(list.problems).toMatchObject([{ row: 6, column: 'entry number' }])
+    expect(list.rows).toMatchObject([{ row: 4, number: '7', note: 'quiet on tyres' }])
+    expect(list.rowCount).toBe(2)
+  })
+
+  test('rows may end in several ways in one list', () => {
+    const [second, third] = ['8', '9'].map((number) => LINE.replace('7,', `${number},`).replace('gf90 vgn', `gf9${number} vgn`))
+    const list = readEntryList(`${HEAD}\r\n${LINE}\r\n${second}\n${third}\r`)
+    expect(list.problems).toEqual([])
+    expect(list.rows.map(({ row, number }) => [row, number])).toEqual([
+      [2, '7'],
+      [3, '8'],
+      [4, '9'],
+    ])
+  })
+
   test.each([
     ['no number', LINE.replace('7,', ','), 'entry number'],
     ['a number with a sign', LINE.replace('7,', '7#,'), 'entry number'],
