@@ -1,0 +1,116 @@
+import type { Browser, Page } from 'playwright-core'
+import { afterAll, beforeAll, expect, test } from 'vitest'
+import { axeFindings } from '../support/axe'
+import { findCar, present } from '../support/bay-walk'
+import { launchBrowser } from '../support/browser'
+import { becomeCrewDevice, signInOn } from '../support/crew-device'
+import { askByCode, answered } from '../support/pit-exit-device'
+import { type SeededServer, startSeededServer } from '../support/seeded-server'
+import { step, watchPage, type WatchedPage } from '../support/watch-page'
+
+const THEMES = ['sun', 'night'] as const
+type Theme = (typeof THEMES)[number]
+
+let seeded: SeededServer
+let browser: Browser
+
+beforeAll(async () => {
+  seeded = await startSeededServer('axe')
+  browser = await launchBrowser()
+})
+
+afterAll(async () => {
+  await browser.close()
+  await seeded.end(seeded.server)
+})
+
+test.each(THEMES)('axe finds nothing on the office’s pages in %s', async (theme) => {
+  const office = await open(`office in ${theme}`, theme, { width: 1280, height: 900 })
+  const { page } = office
+  const at = `/events/${seeded.event}`
+  const found = await step('the office is looked through', [office], async () => {
+    await page.goto(`${seeded.server.origin}/sign-in`)
+    const signIn = await lookAt(page, 'sign-in', theme, page.getByRole('button', { name: 'Sign in' }))
+    await signInOn(page, seeded.server.origin, { email: 'organiser@marram.example', password: seeded.password }, `${at}/board`)
+    const board = await lookAt(page, 'board', theme, page.getByRole('region', { name: 'Novice' }))
+    await page.goto(`${seeded.server.origin}${at}/import`)
+    const list = await lookAt(page, 'import', theme, page.getByText('No list chosen'))
+    await page.goto(`${seeded.server.origin}${at}/people`)
+    const people = await lookAt(page, 'people', theme, page.getByRole('table'))
+    return [...signIn, ...board, ...list, ...people]
+  })
+
+  expect(found).toEqual([])
+  expect(office.complaints()).toEqual([])
+})
+
+test.each(THEMES)('axe finds nothing on the bay’s screens in %s, and nothing is wider than a phone', async (theme) => {
+  const bay = await open(`bay in ${theme}`, theme, { width: 360, height: 800 })
+  const { page } = bay
+  const found = await step('the bay is looked through', [bay], async () => {
+    const as = { email: 'scrutineer@marram.example', password: seeded.password, post: 'bay', device: `bay in ${theme}` } as const
+    await becomeCrewDevice(page, seeded.server.origin, as)
+    const find = await lookAt(page, 'find', theme, page.getByRole('heading', { name: 'Find a car' }))
+    await findCar(page, theme === 'sun' ? '263' : '323')
+    const facts = await lookAt(page, 'facts', theme, page.getByRole('button', { name: 'Begin the walk' }))
+    await present(page, { belts: 'harness', headRestraint: false, roof: 'open' })
+    const car = await lookAt(page, 'car', theme, page.getByRole('navigation', { name: 'Places' }))
+    await page.getByRole('button', { name: /^Go on: Cabin/ }).click()
+    const place = await lookAt(page, 'place', theme, page.getByRole('button', { name: 'Not so' }))
+    await page.getByRole('list', { name: 'Checks at Cabin' }).getByRole('button', { name: 'shoulder angle' }).click()
+    const measured = await lookAt(page, 'place, a measured check', theme, page.getByRole('button', { name: 'Next value' }))
+    await page.getByRole('button', { name: 'Not so' }).click()
+    const reasons = await lookAt(page, 'place, reasons', theme, page.getByRole('dialog'))
+    return [...find, ...facts, ...car, ...place, ...measured, ...reasons]
+  })
+
+  expect(found).toEqual([])
+  expect(bay.complaints()).toEqual([])
+})
+
+test.each(THEMES)('axe finds nothing at the pit exit in %s, and nothing is wider than a phone', async (theme) => {
+  const pit = await open(`pit exit in ${theme}`, theme, { width: 360, height: 800 })
+  const { page } = pit
+  const found = await step('the pit exit is looked through', [pit], async () => {
+    const as = { email: 'marshal@marram.example', password: seeded.password, post: 'pit-exit', device: `pit exit in ${theme}` } as const
+    await becomeCrewDevice(page, seeded.server.origin, as)
+    const number = await lookAt(page, 'pit exit', theme, page.getByRole('textbox', { name: 'Number of the car' }))
+    await askByCode(page, '00000000')
+    await answered(page, 'HOLD')
+    const answer = await lookAt(page, 'answer', theme, page.getByRole('button', { name: 'Next car' }))
+    return [...number, ...answer]
+  })
+
+  expect(found).toEqual([])
+  expect(pit.complaints()).toEqual([])
+})
+
+test('axe would find something: a picture without words, put on the sign-in page', async () => {
+  const { page } = await open('sign-in', 'sun', { width: 360, height: 800 })
+  await page.goto(`${seeded.server.origin}/sign-in`)
+  await isAlive(page)
+  await page.evaluate(() => document.querySelector('main')?.append(document.createElement('img')))
+
+  expect(await lookAt(page, 'sign-in', 'sun', page.getByRole('main'))).toEqual([expect.stringMatching(/^sign-in: image-alt: /)])
+})
+
+/** What is wrong with the page once `ready` stands on it, each with the page's name. */
+async function lookAt(page: Page, name: string, theme: Theme, ready: ReturnType<Page['getByRole']>): Promise<readonly string[]> {
+  await isAlive(page)
+  await ready.first().waitFor()
+  expect(await page.evaluate(() => document.documentElement.dataset.theme ?? 'sun')).toBe(theme)
+  const tooWide = await page.evaluate(() => document.documentElement.scrollWidth - window.innerWidth)
+  const findings = await axeFindings(page)
+  return [...findings, ...(tooWide > 0 ? [`${tooWide} px wider than the screen`] : [])].map((finding) => `${name}: ${finding}`)
+}
+
+/** The worker is registered by an effect: from then on the page is what its scripts make of it. */
+async function isAlive(page: Page): Promise<void> {
+  await page.evaluate(() => navigator.serviceWorker.ready.then(() => document.fonts.ready))
+}
+
+async function open(name: string, theme: Theme, viewport: { readonly width: number; readonly height: number }): Promise<WatchedPage> {
+  const context = await browser.newContext({ viewport })
+  await context.addInitScript((chosen) => localStorage.setItem('lockwire.theme', chosen), theme)
+  return watchPage(await context.newPage(), name)
+}
