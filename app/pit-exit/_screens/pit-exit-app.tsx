@@ -1,10 +1,13 @@
 'use client'
 
-/** The pit exit's screens. */
+import { CrewGate } from '@/app/_crew/crew-gate'
+import { PitExitScreen } from './pit-exit-screen'
+
+/** The pit exit's screens, behind what stands before every crew screen. */
 export function PitExitApp() {
   return (
-    <main className="p-4">
-      <h1 className="text-2xl">Pit exit</h1>
-    </main>
+    <CrewGate post="pit-exit">
+      <PitExitScreen />
+    </CrewGate>
   )
 }
