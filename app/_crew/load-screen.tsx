@@ -1,42 +1,47 @@
 'use client'
 
-import { useEffect, useState } from 'react'
+import { useEffect, useRef, useState } from 'react'
 import { Button } from '@/app/_ui/button'
 import { Notice } from '@/app/_ui/notice'
 import { Progress } from '@/app/_ui/progress'
 import type { DeviceCheck, LoadProgress } from '@/lib/sync/client/day-client'
-import { dayProblemOf, type DayProblem } from '@/lib/sync/client/day-problem'
 import { useDay } from './day-context'
+import { useAction } from './use-action'
+
+const STEPS: Readonly<Record<LoadProgress['step'], string>> = {
+  event: 'asking for the event',
+  records: 'records',
+  checklists: 'checklist and limits',
+  device: 'looking at this device',
+  done: 'done',
+}
 
 /** Loads the day onto this device, with real counts, and says what this device can and cannot do before anybody walks out of the signal. */
 export function LoadScreen({ onReady }: { readonly onReady: () => void }) {
   const day = useDay()
   const [progress, setProgress] = useState<LoadProgress | null>(null)
-  const [problem, setProblem] = useState<DayProblem | null>(null)
   const [check, setCheck] = useState<DeviceCheck | null>(null)
-  const [tries, setTries] = useState(0)
+  const { busy, problem, act } = useAction()
+  const begun = useRef(false)
+  const load = () => act(async () => setCheck(await day.loadDay(setProgress)))
   useEffect(() => {
-    let cancelled = false
-    day
-      .loadDay((now) => !cancelled && setProgress(now))
-      .then(
-        (done) => !cancelled && setCheck(done),
-        (error: unknown) => {
-          const known = dayProblemOf(error)
-          if (!known) throw error
-          if (!cancelled) setProblem(known)
-        },
-      )
-    return () => {
-      cancelled = true
-    }
-  }, [day, tries])
+    // Once, also where effects are started twice.
+    if (begun.current) return
+    begun.current = true
+    void load()
+  })
   return (
     <main className="grid gap-4 p-4">
       <h1 className="text-xl">Load the day</h1>
       <p>Entries, checklist, limits and all records of the event come onto this device. Stay where there is signal until it says ready.</p>
       {progress && (
-        <Progress label="Entries and records" done={progress.entries + progress.records} total={null} unit={`loaded (${progress.step})`} />
+        <>
+          <Progress label="Entries" done={progress.entries} total={null} unit="loaded" />
+          <Progress label="Records" done={progress.records} total={progress.of} unit="loaded" />
+          <p role="status" className="text-muted">
+            Now: {STEPS[progress.step]}
+          </p>
+        </>
       )}
       {check && <Checked check={check} onReady={onReady} />}
       {problem && (
@@ -45,12 +50,7 @@ export function LoadScreen({ onReady }: { readonly onReady: () => void }) {
           kept={problem.kept}
           todo={problem.todo}
           actions={
-            <Button
-              onClick={() => {
-                setProblem(null)
-                setTries(tries + 1)
-              }}
-            >
+            <Button isBusy={busy} onClick={() => void load()}>
               Load again
             </Button>
           }

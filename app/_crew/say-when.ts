@@ -1,13 +1,14 @@
+import { civilDate } from '@/lib/rules/civil-date'
+import { dateInWords } from '@/lib/rules/date-in-words'
+
 /** `07:41` in the venue's time zone. */
 export function clockTime(at: number, timeZone: string): string {
   return new Intl.DateTimeFormat('en-GB', { hour: '2-digit', minute: '2-digit', hourCycle: 'h23', timeZone }).format(at)
 }
 
-/** `Sat 9 May 2026` for a civil date. */
+/** `Sat 9 May 2026` for a civil date as text. Throws where it is none. */
 export function dayWords(day: string): string {
-  const date = new Date(`${day}T12:00:00Z`)
-  const part = (options: Intl.DateTimeFormatOptions) => new Intl.DateTimeFormat('en-GB', { ...options, timeZone: 'UTC' }).format(date)
-  return `${part({ weekday: 'short' })} ${part({ day: 'numeric' })} ${part({ month: 'short' }).slice(0, 3)} ${part({ year: 'numeric' })}`
+  return dateInWords(civilDate(day))
 }
 
 /** `just now`, `6 min ago`, `3 h ago`. */

@@ -3,6 +3,7 @@
 import { useSyncExternalStore } from 'react'
 
 const MOVED = 'lockwire:moved'
+let moved = false
 
 /**
  * The path of the address bar inside a crew shell. A shell kept by the worker answers for every address below it, so the router's own
@@ -15,9 +16,15 @@ export function useLocation(): string | null {
 /** Goes to another screen of the same shell without a request. */
 export function goTo(path: string): void {
   if (path === window.location.pathname) return
+  moved = true
   window.history.pushState(null, '', path)
   window.dispatchEvent(new Event(MOVED))
   window.scrollTo(0, 0)
+}
+
+/** Whether this page has gone anywhere since it was loaded. */
+export function hasMoved(): boolean {
+  return moved
 }
 
 function readPath(): string {

@@ -44,7 +44,7 @@ export function answerCheck(
 
   const judgement = judgeCheck(check, answer.values, facts, on)
   const outcome = answer.say === 'put-right' ? atLeastOk(judgement) : answer.say
-  if (outcome !== 'fail' && judgement?.outcome === 'undecided') return { refused: 'value-missing', judgement }
+  if (outcome !== 'fail' && isUndecided(check, answer.values, judgement)) return { refused: 'value-missing', judgement }
   if (judgement && judgement.outcome !== 'undecided' && SEVERITY[outcome] < SEVERITY[judgement.outcome])
     return { refused: 'milder-than-rule', judgement }
   return {
@@ -66,6 +66,11 @@ export function isRefusal(result: FindingDraft | AnswerRefusal): result is Answe
 /** What was put right reads ok, or advisory where the rule still says so; a rule that still says fail is refused as milder. */
 function atLeastOk(judgement: Judgement | null): 'ok' | 'advisory' {
   return judgement?.outcome === 'advisory' ? 'advisory' : 'ok'
+}
+
+/** A rule says what it lacks; where there is none, a measured check still wants something measured (rule F3). */
+function isUndecided(check: BookCheck, values: Values, judgement: Judgement | null): boolean {
+  return judgement ? judgement.outcome === 'undecided' : check.measure !== undefined && !hasValues(values)
 }
 
 function hasValues(values: Values): boolean {

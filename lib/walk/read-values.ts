@@ -1,7 +1,7 @@
 import type { MeasureField } from '@/lib/checklist/checklist'
 import type { Values } from './answer'
 
-/** What was typed, field by field; a field not typed yet is missing. */
+/** What was typed, by field id; a field not typed yet is missing. */
 export type Typed = Readonly<Record<string, string>>
 
 /** Values ready to judge, and what cannot be one. */
@@ -32,8 +32,13 @@ function readField(field: MeasureField, text: string): { readonly value: string 
   if (field.kind === 'text') {
     return text.length <= field.maxLength ? { value: text } : { why: `${field.label}: at most ${field.maxLength} characters.` }
   }
-  const number = /^-?\d+([.,]\d+)?$/.test(text) ? Number(text.replace(',', '.')) : null
+  const number = readNumber(text)
   if (number === null || number < field.min || number > field.max)
-    return { why: `${field.label}: a number from ${field.min} to ${field.max} ${field.unit}.` }
+    return { why: `${field.label}: a number from ${field.min} to ${[field.max, field.unit].join(' ').trim()}.` }
   return { value: number }
+}
+
+/** Half-typed is a number too: it is judged at each keystroke, and `2.` is on its way to `2.5`. */
+function readNumber(text: string): number | null {
+  return /^-?(\d+[.,]?\d*|[.,]\d+)$/.test(text) ? Number(text.replace(',', '.')) : null
 }

@@ -1,8 +1,20 @@
+/** What was met and is being put right on the spot, until it has been looked at again. */
+export interface Mending {
+  /** The values of the state met, as typed. */
+  readonly typed: Readonly<Record<string, string>>
+  readonly reason: string
+  /** Free text; empty for none. */
+  readonly note: string
+}
+
 /** Where a walk was left: the screen reopens at the very check, with what had been typed (LOOK, "Interruption-proof"). */
 export interface LeftAt {
   readonly place: string
+  /** Check id; null for the place's closing sentence. */
   readonly check: string | null
-  readonly values: Readonly<Record<string, string>>
+  readonly typed: Readonly<Record<string, string>>
+  /** Kept too: a repair that a reload forgot would be recorded as if nothing had been wrong. */
+  readonly mending: Mending | null
   /** Device clock, ms. */
   readonly at: number
 }
@@ -43,15 +55,27 @@ function attempt<T>(work: () => T, otherwise: T): T {
 }
 
 function isLeftAt(value: unknown): value is LeftAt {
-  if (typeof value !== 'object' || value === null) return false
-  const { place, check, values, at } = value as Partial<Record<keyof LeftAt, unknown>>
-  const isText = (text: unknown) => typeof text === 'string'
-  return (
-    isText(place) &&
-    (check === null || isText(check)) &&
-    typeof at === 'number' &&
-    typeof values === 'object' &&
-    values !== null &&
-    Object.values(values).every(isText)
-  )
+  if (!isObject(value)) return false
+  const { place, check, typed, mending, at } = value
+  return isText(place) && (check === null || isText(check)) && isTyped(typed) && (mending === null || isMending(mending)) && isTime(at)
+}
+
+function isMending(value: unknown): boolean {
+  return isObject(value) && isTyped(value['typed']) && isText(value['reason']) && isText(value['note'])
+}
+
+function isTyped(value: unknown): boolean {
+  return isObject(value) && Object.values(value).every(isText)
+}
+
+function isObject(value: unknown): value is Readonly<Record<string, unknown>> {
+  return typeof value === 'object' && value !== null
+}
+
+function isText(value: unknown): boolean {
+  return typeof value === 'string'
+}
+
+function isTime(value: unknown): boolean {
+  return typeof value === 'number'
 }

@@ -25,14 +25,9 @@ export interface WalkPlace {
   readonly unanswered: number
   /** Required ones among them. */
   readonly missing: number
+  /** Those among them that have been seen and are to be seen again. */
+  readonly seeAgain: number
   readonly worst: 'fail' | 'could-not-see' | 'advisory' | 'ok' | 'none'
-}
-
-/** Where the walk stands or goes next: a check of a place, or the closing sentence of the place. */
-export interface WalkStop {
-  readonly place: string
-  /** Check id; null for the place's closing sentence. */
-  readonly check: string | null
 }
 
 const ANSWERED: readonly string[] = ['ok', 'advisory', 'fail', 'could-not-see']
@@ -53,18 +48,10 @@ export function planWalk(
   return places.map((place) => toPlace(place, items)).filter((place) => place.oneByOne.length + place.together.length > 0)
 }
 
-/** The next thing without an answer after `from` (or from the start), once round; null when all is answered. */
-export function nextStop(plan: readonly WalkPlace[], from: WalkStop | null): WalkStop | null {
-  const stops = plan.flatMap(stopsOf)
-  const at = from === null ? -1 : stops.findIndex((stop) => stop.place === from.place && stop.check === from.check)
-  const ahead = [...stops.slice(at + 1), ...stops.slice(0, at + 1)]
-  const next = ahead.find((stop) => stop.open)
-  return next ? { place: next.place, check: next.check } : null
-}
-
 function isPartOfWalk(check: BookCheck, asked: ReadonlySet<string>, state: CheckState | undefined): boolean {
   if (asked.has(check.id)) return true
-  if (!state) return false
+  // What was answered before a fact was corrected is no hole: it does not apply. A fail stands all the same, and is shown.
+  if (!state || state.standing === 'does-not-apply') return false
   return state.required || state.heads.length > 0
 }
 
@@ -76,7 +63,7 @@ function toItem(check: BookCheck, state: CheckState | null): WalkItem {
 
 function toPlace(place: Place, all: readonly WalkItem[]): WalkPlace {
   const items = all.filter((item) => item.check.place === place.id && item.check.subject === place.subject)
-  const isSingle = (item: WalkItem) => isOneByOne(item.check) || needsOwnLook(item)
+  const isSingle = (item: WalkItem) => isOneByOne(item.check) || item.check.rule !== undefined || needsOwnLook(item)
   const rank = (item: WalkItem) => (item.check.critical ? 0 : item.check.measure ? 1 : 2)
   const open = items.filter((item) => !item.answered)
   return {
@@ -85,11 +72,12 @@ function toPlace(place: Place, all: readonly WalkItem[]): WalkPlace {
     together: items.filter((item) => !isSingle(item)),
     unanswered: open.length,
     missing: open.filter((item) => item.required).length,
+    seeAgain: open.filter((item) => item.seeAgain).length,
     worst: worstOf(items),
   }
 }
 
-/** A closing sentence says "nothing found": what stands otherwise, or is disputed, is answered by itself. */
+/** A closing sentence says "nothing found" and nothing of the past: what stands otherwise, or is disputed, is answered by itself. */
 function needsOwnLook(item: WalkItem): boolean {
   if (!item.state) return false
   return ['advisory', 'fail', 'could-not-see'].includes(item.state.standing) || item.state.disagreement
@@ -99,10 +87,4 @@ function worstOf(items: readonly WalkItem[]): WalkPlace['worst'] {
   for (const standing of ['fail', 'could-not-see', 'advisory', 'ok'] as const)
     if (items.some((item) => item.state?.standing === standing)) return standing
   return 'none'
-}
-
-function stopsOf(place: WalkPlace): readonly (WalkStop & { readonly open: boolean })[] {
-  const single = place.oneByOne.map((item) => ({ place: place.place.id, check: item.check.id, open: !item.answered }))
-  const rest = { place: place.place.id, check: null, open: place.together.some((item) => !item.answered) }
-  return place.together.length > 0 ? [...single, rest] : single
 }

@@ -5,10 +5,11 @@ import { useDay } from '@/app/_crew/day-context'
 import { goTo, useLocation } from '@/app/_crew/use-location'
 import { Button } from '@/app/_ui/button'
 import { Notice } from '@/app/_ui/notice'
+import { useDayEntries } from '@/lib/sync/client/use-day'
 import { CarScreen } from './car-screen'
 import { FindCar } from './find-car'
 
-/** The bay's screens. The address says which; it is read in the browser, since one kept shell answers for all of them. */
+/** The bay's screens, behind the gate of every crew device. */
 export function BayApp() {
   return (
     <CrewGate post="bay">
@@ -17,19 +18,23 @@ export function BayApp() {
   )
 }
 
-function BayScreens() {
-  const day = useDay()
+/** Which of the bay's screens the address says; it is read in the browser, since one kept shell answers for all of them. */
+export function BayScreens() {
+  // Drawn again when an entry changes: a record says what number its screen showed (rule T1), so the screen may never lag behind.
+  const entries = useDayEntries(useDay())
   const [, , what, id, ...rest] = (useLocation() ?? '/bay').split('/')
   if (what === undefined || what === '') return <FindCar />
-  const entry = what === 'car' && id !== undefined ? day.entry(id) : null
+  const entry = what === 'car' ? entries.find((one) => one.id === id) : undefined
   if (entry) return <CarScreen key={entry.id} entry={entry} rest={rest} />
   return (
-    <Notice
-      happened="This address leads to no car on this device."
-      kept="Nothing was lost."
-      todo="Find the car by number or plate."
-      actions={<Button onClick={() => goTo('/bay')}>Find a car</Button>}
-      className="m-4"
-    />
+    <main>
+      <Notice
+        happened="This address leads to no car on this device."
+        kept="Nothing was lost."
+        todo="Find the car by number or plate."
+        actions={<Button onClick={() => goTo('/bay')}>Find a car</Button>}
+        className="m-4"
+      />
+    </main>
   )
 }

@@ -2,7 +2,7 @@ import { OutcomeButton } from '@/app/_ui/outcome-button'
 import { OutcomeShape } from '@/app/_ui/outcome-shape'
 import { closingSentence } from '@/lib/checklist/places'
 import type { WalkPlace } from '@/lib/walk/walk-plan'
-import { stateOf } from './stop-picker'
+import { STATE_WORDS, stateOf } from './stop-picker'
 
 interface ClosingPanelProps {
   readonly here: WalkPlace
@@ -31,9 +31,10 @@ export function ClosingPanel({ here, busy, onClose, onPick }: ClosingPanelProps)
               onClick={() => onPick(item.check.id)}
               className="target flex w-full items-start gap-3 py-3 text-left active:bg-surface"
             >
-              <OutcomeShape state={stateOf(item)} className="mt-1 size-6" />
+              <OutcomeShape state={stateOf(item)} className="mt-1 size-6" label={STATE_WORDS[stateOf(item)]} />
               <span>
                 <span className="font-bold">{item.check.prompt}</span>
+                {item.seeAgain && <span className="block font-bold">See again</span>}
                 <span className="block text-muted">{item.check.how}</span>
               </span>
             </button>

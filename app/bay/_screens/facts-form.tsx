@@ -5,7 +5,8 @@ import { Button } from '@/app/_ui/button'
 import { evaluateCondition } from '@/lib/checklist/condition'
 import type { Book } from '@/lib/checklist/book'
 import type { CarFacts } from '@/lib/checklist/car-facts'
-import { DEPTHS, type Depth } from '@/lib/checklist/checklist'
+import { DEPTHS, type Depth, type FactDefinition } from '@/lib/checklist/checklist'
+import { OneOf } from './one-of'
 
 interface FactsFormProps {
   readonly book: Book
@@ -17,18 +18,14 @@ interface FactsFormProps {
   readonly onPresent: (facts: CarFacts, depth: Depth) => void
 }
 
-const DEPTH_WORDS: Readonly<Record<Depth, string>> = {
-  'look-over': 'Look-over: known car, unchanged',
-  standard: 'Standard: road car',
-  full: 'Full: first time, caged or modified',
-}
+const DEPTH_OPTIONS = DEPTHS.map((value) => ({ value, label: depthWords(value) }))
 
 /** What stands before the scrutineer: the facts that decide what is asked. One that nobody answers stays unknown, and then everything is asked. */
 export function FactsForm({ book, kind, known, depth: depthBefore, busy, onPresent }: FactsFormProps) {
   const [facts, setFacts] = useState<CarFacts>(known)
   const [depth, setDepth] = useState<Depth>(depthBefore)
   const asked = book.checklist.facts.filter((fact) => fact.subject === kind && isAskedNow(fact, facts))
-  const unknown = asked.filter((fact) => facts[fact.name] === undefined)
+  const unknown = asked.filter((fact) => (facts[fact.name] ?? undefined) === undefined)
   return (
     <form
       className="grid gap-4"
@@ -38,25 +35,18 @@ export function FactsForm({ book, kind, known, depth: depthBefore, busy, onPrese
         onPresent(Object.fromEntries(Object.entries(facts).filter(([name]) => names.has(name))), depth)
       }}
     >
-      {asked.map((fact) => (
-        <Choice
-          key={fact.name}
-          name={fact.name}
-          label={fact.label}
-          options={fact.values.map(({ value, label }) => ({ value: String(value), label, raw: value }))}
-          value={facts[fact.name] === undefined ? null : String(facts[fact.name])}
-          onPick={(raw) => setFacts({ ...facts, [fact.name]: raw })}
+      {asked.map(({ name, label, values }) => (
+        <OneOf
+          key={name}
+          name={name}
+          label={label}
+          options={values}
+          value={facts[name] ?? undefined}
+          onPick={(value) => setFacts({ ...facts, [name]: value })}
+          isStrong
         />
       ))}
-      {kind === 'car' && (
-        <Choice
-          name="depth"
-          label="How deep"
-          options={DEPTHS.map((value) => ({ value, label: DEPTH_WORDS[value], raw: value }))}
-          value={depth}
-          onPick={(raw) => setDepth(raw)}
-        />
-      )}
+      {kind === 'car' && <OneOf name="depth" label="How deep" options={DEPTH_OPTIONS} value={depth} onPick={setDepth} isStrong />}
       {unknown.length > 0 && (
         <p className="text-muted">
           Not answered: {unknown.map(({ label }) => label.toLowerCase()).join(', ')}. What depends on it will be asked.
@@ -69,40 +59,12 @@ export function FactsForm({ book, kind, known, depth: depthBefore, busy, onPrese
   )
 }
 
+function depthWords(depth: Depth): string {
+  if (depth === 'look-over') return 'Look-over: known car, unchanged'
+  return depth === 'standard' ? 'Standard: road car' : 'Full: first time, caged or modified'
+}
+
 /** Asked only once what it hangs on has been said: nobody is asked about a harness before the belts are known. */
-function isAskedNow(fact: Book['checklist']['facts'][number], facts: CarFacts): boolean {
+function isAskedNow(fact: FactDefinition, facts: CarFacts): boolean {
   return fact.applies === undefined || evaluateCondition(fact.applies, facts) === true
-}
-
-interface ChoiceProps<T> {
-  readonly name: string
-  readonly label: string
-  readonly options: readonly { readonly value: string; readonly label: string; readonly raw: T }[]
-  readonly value: string | null
-  readonly onPick: (value: T) => void
-}
-
-function Choice<T>({ name, label, options, value, onPick }: ChoiceProps<T>) {
-  return (
-    <fieldset>
-      <legend className="font-bold">{label}</legend>
-      <div className="mt-1 flex flex-wrap gap-2">
-        {options.map((option) => (
-          <label
-            key={option.value}
-            className="target flex items-center gap-2 rounded-sm border border-line px-3 py-2 has-checked:border-accent has-checked:bg-accent has-checked:text-accent-ink"
-          >
-            <input
-              type="radio"
-              className="size-5 accent-current"
-              name={name}
-              checked={value === option.value}
-              onChange={() => onPick(option.raw)}
-            />
-            {option.label}
-          </label>
-        ))}
-      </div>
-    </fieldset>
-  )
 }

@@ -27,7 +27,15 @@ export function PlaceList({ plan, base }: { readonly plan: readonly WalkPlace[];
   )
 }
 
-function holes({ unanswered, missing }: WalkPlace): string {
+function holes({ unanswered, missing, seeAgain }: WalkPlace): string {
   if (unanswered === 0) return 'closed'
-  return missing === unanswered ? `${missing} to see` : `${missing} to see, ${unanswered - missing} optional`
+  const optional = unanswered - missing
+  return [
+    missing > 0 ? `${missing} to see` : '',
+    seeAgain > 0 ? (seeAgain === missing ? 'again' : `${seeAgain} of them again`) : '',
+    optional > 0 ? `${optional} optional` : '',
+  ]
+    .filter((part) => part !== '')
+    .join(', ')
+    .replace('see, again', 'see again')
 }

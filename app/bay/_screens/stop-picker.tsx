@@ -1,5 +1,6 @@
 import { OutcomeShape, type OutcomeState } from '@/app/_ui/outcome-shape'
-import type { WalkItem, WalkPlace, WalkStop } from '@/lib/walk/walk-plan'
+import type { WalkStop } from '@/lib/walk/next-stop'
+import type { WalkItem, WalkPlace } from '@/lib/walk/walk-plan'
 
 interface StopPickerProps {
   readonly here: WalkPlace
@@ -12,12 +13,14 @@ export function StopPicker({ here, stop, onPick }: StopPickerProps) {
   // One of the rest, answered by itself, belongs to the rest.
   const current = here.oneByOne.some(({ check }) => check.id === stop.check) ? stop.check : null
   const stops = [
-    ...here.oneByOne.map((item) => ({ check: item.check.id, words: item.check.short, state: stateOf(item) })),
-    ...(here.together.length > 0 ? [{ check: null, words: 'the rest', state: restState(here.together) }] : []),
+    ...here.oneByOne.map((item) => ({ check: item.check.id, words: item.check.short, state: stateOf(item), seeAgain: item.seeAgain })),
+    ...(here.together.length > 0
+      ? [{ check: null, words: 'the rest', state: restState(here.together), seeAgain: here.together.some((item) => item.seeAgain) }]
+      : []),
   ]
   return (
     <ol className="mt-2 flex gap-1 overflow-x-auto pb-1" aria-label={`Checks at ${here.place.title}`}>
-      {stops.map(({ check, words, state }) => (
+      {stops.map(({ check, words, state, seeAgain }) => (
         <li key={check ?? 'rest'} className="shrink-0">
           <button
             type="button"
@@ -27,6 +30,7 @@ export function StopPicker({ here, stop, onPick }: StopPickerProps) {
           >
             <OutcomeShape state={state} className="size-5" label={STATE_WORDS[state]} />
             {words}
+            {seeAgain && <span className="font-normal">(again)</span>}
           </button>
         </li>
       ))}
@@ -34,7 +38,8 @@ export function StopPicker({ here, stop, onPick }: StopPickerProps) {
   )
 }
 
-const STATE_WORDS: Readonly<Record<OutcomeState, string>> = {
+/** The shape of one check in words, for who hears it. */
+export const STATE_WORDS: Readonly<Record<OutcomeState, string>> = {
   ok: 'ok',
   advisory: 'advisory',
   fail: 'fail',
@@ -46,7 +51,7 @@ const STATE_WORDS: Readonly<Record<OutcomeState, string>> = {
 
 /** The shape of one check as it stands. */
 export function stateOf(item: WalkItem): OutcomeState {
-  if (item.seeAgain) return 'none'
+  if (item.seeAgain && item.state?.standing !== 'fail') return 'none'
   switch (item.state?.standing) {
     case 'ok':
     case 'advisory':

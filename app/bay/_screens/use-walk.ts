@@ -8,6 +8,7 @@ import type { CarFacts } from '@/lib/checklist/car-facts'
 import type { Depth } from '@/lib/checklist/checklist'
 import type { SubjectState } from '@/lib/inspection/state'
 import { subjectKey, type Subject } from '@/lib/inspection/subject'
+import type { DayClient } from '@/lib/sync/client/day-client'
 import { useDayStatus, useSubjectState } from '@/lib/sync/client/use-day'
 import { planWalk, type WalkPlace } from '@/lib/walk/walk-plan'
 
@@ -32,25 +33,30 @@ export function useWalk(subject: WalkSubject): Walk {
   const key = subjectKey(subject)
   const state = useSubjectState(day, key)
   const status = useDayStatus(day)
-  return useMemo(() => {
-    const head = state.presentedHeads[0]?.record ?? null
-    const book = head ? day.book(head.checklist, head.limits) : day.book()
-    const kind = 'car' in subject ? 'car' : 'person'
-    const asked = new Set(
-      book
-        ? state.presentedHeads.flatMap(({ record }) => askedChecks(book, kind, record.facts, record.depth).map((check) => check.id))
-        : [],
-    )
-    return {
-      subject,
-      state,
-      book,
-      facts: head?.facts ?? null,
-      depth: state.depth,
-      plan: book ? planWalk(book.checklist.places, book.checks, asked, state.checks) : [],
-      lastDay: status.event?.lastDay ?? status.day,
-    }
-    // The key stands for the subject: two equal subjects are one walk.
-    // eslint-disable-next-line react-hooks/exhaustive-deps -- the dependency stands in another form, as the line above says
-  }, [day, key, state, status.event?.lastDay, status.day])
+  // The key stands for the subject, and the state and status for all that the walk is made of: two equal subjects are one walk.
+  // eslint-disable-next-line react-hooks/exhaustive-deps -- the dependencies stand in another form, as the line above says
+  return useMemo(() => walkOf(day, subject), [day, key, state, status.event?.lastDay, status.day])
+}
+
+/** The walk of a car or a person as it stands at this moment. */
+export function walkOf(day: DayClient, subject: WalkSubject): Walk {
+  const state = day.state(subjectKey(subject))
+  const status = day.status()
+  const head = state.presentedHeads[0]?.record ?? null
+  const book = head ? day.book(head.checklist, head.limits) : day.book()
+  return {
+    subject,
+    state,
+    book,
+    facts: head?.facts ?? null,
+    depth: state.depth,
+    plan: book ? planWalk(book.checklist.places, book.checks, askedOf('car' in subject ? 'car' : 'person', state, book), state.checks) : [],
+    lastDay: status.event?.lastDay ?? status.day,
+  }
+}
+
+/** All that any of the `presented` asks (rule F12). */
+function askedOf(kind: 'car' | 'person', state: SubjectState, book: Book): ReadonlySet<string> {
+  const asked = state.presentedHeads.flatMap(({ record }) => askedChecks(book, kind, record.facts, record.depth))
+  return new Set(asked.map((check) => check.id))
 }

@@ -1,0 +1,18 @@
+import type { BookCheck } from '@/lib/checklist/book'
+import type { Head } from '@/lib/inspection/state'
+import { explainJudgement } from '@/lib/rules/explain'
+
+/** On what grounds a head says what it says: reason, own words, and the figure that decided; empty where it gave none. */
+export function headWords({ record }: Head, check: BookCheck, noteOf: (hash: string) => string | null): string {
+  if (record.kind === 'dispensation') return `accepted with conditions: ${record.conditions}`
+  if (record.kind === 'ruling') return `ruled by the chief: ${record.why}`
+  const reason = record.reason ?? record.found?.reason
+  const { judgement } = record
+  const parts = [
+    record.found ? 'put right here' : '',
+    check.reasons.find(({ id }) => id === reason)?.text ?? '',
+    ...(record.notes ?? []).map((hash) => noteOf(hash) ?? 'own words that are not on this device'),
+    judgement ? explainJudgement(judgement.code, judgement.facts) : '',
+  ]
+  return parts.filter((part) => part !== '').join('. ')
+}

@@ -1,0 +1,93 @@
+'use client'
+
+import { useState } from 'react'
+import type { CarFacts } from '@/lib/checklist/car-facts'
+import { judgeCheck } from '@/lib/checklist/judge-check'
+import { civilDate } from '@/lib/rules/civil-date'
+import type { Judgement } from '@/lib/rules/judgement'
+import type { Answer } from '@/lib/walk/answer'
+import { readValues, type ReadValues } from '@/lib/walk/read-values'
+import type { WalkItem } from '@/lib/walk/walk-plan'
+import type { Entered } from './use-position'
+
+export interface CheckInput {
+  readonly item: WalkItem
+  readonly facts: CarFacts
+  /** The event's last day: dated kit is judged on it. */
+  readonly lastDay: string
+  readonly entered: Entered
+  readonly setEntered: (entered: Entered) => void
+  readonly onAnswer: (answer: Answer, note: string) => void
+}
+
+/** What a reason is being asked for. */
+export type Asking = 'fail' | 'advisory' | 'put-right'
+
+export interface CheckNow {
+  readonly problems: ReadValues['problems']
+  readonly judgement: Judgement | null
+  /** What an answer may be at its mildest as the values stand. */
+  readonly says: 'ok' | 'advisory' | 'fail' | 'undecided'
+  readonly asking: Asking | null
+  readonly ask: (asking: Asking | null) => void
+  /** Free text for the reason; it stays until the check is answered. */
+  readonly note: string
+  readonly setNote: (note: string) => void
+  readonly give: (reason: string) => void
+  /** The mildest answer the rule allows: ok, or advisory. */
+  readonly agree: (says: 'ok' | 'advisory') => void
+  readonly couldNotSee: () => void
+  readonly dropMending: () => void
+}
+
+/** One check as it is being answered. The judgement proposes, the person decides, never milder. */
+export function useCheck({ item, facts, lastDay, entered, setEntered, onAnswer }: CheckInput): CheckNow {
+  const { check } = item
+  const { typed, mending } = entered
+  const fields = check.measure ?? []
+  const [asking, ask] = useState<Asking | null>(null)
+  const [note, setNote] = useState('')
+  const { values, problems } = readValues(fields, typed)
+  const judgement = problems.length > 0 ? null : judgeCheck(check, values, facts, civilDate(lastDay))
+
+  const give = (reason: string) => {
+    ask(null)
+    if (asking === 'put-right') putRight(reason)
+    else if (asking !== null) onAnswer({ say: asking, values, reason }, note.trim())
+  }
+
+  const putRight = (reason: string) => {
+    // What was measured is the state met; the state left is measured anew.
+    if (fields.length > 0) setEntered({ typed: {}, mending: { typed, reason, note: note.trim() } })
+    else onAnswer({ say: 'put-right', found: { values, reason }, values: {} }, note.trim())
+  }
+
+  const agree = (says: 'ok' | 'advisory') => {
+    if (mending) {
+      const found = { values: readValues(fields, mending.typed).values, reason: mending.reason }
+      onAnswer({ say: 'put-right', found, values }, mending.note)
+    } else if (says === 'ok') onAnswer({ say: 'ok', values }, '')
+    else ask('advisory')
+  }
+
+  return {
+    problems,
+    judgement,
+    says: saysOf(item, problems.length > 0, judgement),
+    asking,
+    ask,
+    note,
+    setNote,
+    give,
+    agree,
+    couldNotSee: () => onAnswer({ say: 'could-not-see' }, ''),
+    dropMending: () => {
+      if (mending) setEntered({ typed: mending.typed, mending: null })
+    },
+  }
+}
+
+function saysOf({ check }: WalkItem, hasProblems: boolean, judgement: Judgement | null): CheckNow['says'] {
+  if (hasProblems) return 'undecided'
+  return judgement?.outcome ?? (check.rule ? 'undecided' : 'ok')
+}
