@@ -2,6 +2,7 @@ import Database from 'better-sqlite3'
 import { renameSync } from 'node:fs'
 import { join } from 'node:path'
 import type { Browser } from 'playwright-core'
+import { toBuffer } from 'qrcode'
 import sharp from 'sharp'
 import { afterAll, afterEach, beforeAll, expect, test } from 'vitest'
 import { advises, fails, findCar, present, putsRight, takesOne, walkOn } from '../support/bay-walk'
@@ -46,9 +47,9 @@ let marshal: (WatchedPage & { readonly browser: Browser }) | null = null
 let made = 0
 
 beforeAll(async () => {
+  browser = await launchBrowser()
   seeded = await startSeededServer('all-the-way')
   server = seeded.server
-  browser = await launchBrowser()
   bay = await open(browser, 'bay', { viewport: { width: 390, height: 844 }, deviceScaleFactor: 2 })
   board = await open(browser, 'board', { viewport: { width: 1440, height: 900 } })
 })
@@ -173,7 +174,9 @@ test('[P1 P6 F7] an offline pit exit says PASSED for the label; after a hold and
   })
   await onBoth('after one pull the same sticker is HOLD', async () => {
     await pullOnce(pit.page)
-    expect(await answered(pit.page, 'HOLD')).toContain('Fluid dropped')
+    const said = await answered(pit.page, 'HOLD')
+    expect(said).toContain('Fluid dropped')
+    expect(said).not.toContain('may drive')
     await pit.page.reload()
     await answered(pit.page, 'HOLD')
   })
@@ -211,6 +214,26 @@ test('[P1 P6 F7] an offline pit exit says PASSED for the label; after a hold and
 
   expect(logRows().map(({ seq }) => seq)).toEqual(Array.from({ length: made }, (_, index) => index + 1))
   expect(tokens().map(stickerText)).toEqual(['first.png', 'second.png'].flatMap((name) => zbarimg(join(seeded.folder, name))))
+})
+
+test('a foreign code before the camera is HOLD, and is neither opened nor shown', async () => {
+  const { page } = marshal as NonNullable<typeof marshal>
+  const foreign = 'HTTPS://ELSEWHERE.EXAMPLE/P/LET-ME-OUT'
+  const asked: string[] = []
+  page.on('request', (request) => asked.push(request.url()))
+  await fakeCameraFrom(await toBuffer(foreign, { errorCorrectionLevel: 'Q', width: 600 }), { file: join(seeded.folder, 'foreign.mjpeg') })
+  renameSync(join(seeded.folder, 'foreign.mjpeg'), join(seeded.folder, 'camera.mjpeg'))
+
+  const said = await step('the foreign code is scanned', [bay, marshal as WatchedPage], async () => {
+    await page.reload()
+    const words = await answered(page, 'HOLD')
+    await page.getByText('a link that is not ours').waitFor()
+    return words
+  })
+
+  expect(said.toUpperCase()).not.toContain('ELSEWHERE')
+  expect(asked.filter((url) => new URL(url).host !== new URL(server.origin).host)).toEqual([])
+  expect(page.url()).toBe(`${server.origin}/pit-exit`)
 })
 
 async function walkB(): Promise<void> {
