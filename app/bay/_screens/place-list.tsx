@@ -17,8 +17,7 @@ export function PlaceList({ plan, base }: { readonly plan: readonly WalkPlace[];
               onClick={() => goTo(`${base}/${place.place.id}`)}
             >
               <OutcomeShape state={place.unanswered > 0 && place.worst === 'ok' ? 'none' : WORST[place.worst]} className="size-7" />
-              <span className="grow font-bold">{place.place.title}</span>
-              <span className="text-muted">{holes(place)}</span>
+              <span className="grow font-bold">{place.place.title}</span> <span className="text-muted">{holes(place)}</span>
             </button>
           </li>
         ))}

@@ -29,8 +29,7 @@ export function StopPicker({ here, stop, onPick }: StopPickerProps) {
             className="target flex items-center gap-2 border-b-4 border-transparent px-2 aria-[current=step]:border-accent aria-[current=step]:font-bold"
           >
             <OutcomeShape state={state} className="size-5" label={STATE_WORDS[state]} />
-            {words}
-            {seeAgain && <span className="font-normal">(again)</span>}
+            {words} {seeAgain && <span className="font-normal">(again)</span>}
           </button>
         </li>
       ))}
