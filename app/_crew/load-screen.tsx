@@ -7,6 +7,7 @@ import { Progress } from '@/app/_ui/progress'
 import type { DeviceCheck, LoadProgress } from '@/lib/sync/client/day-client'
 import { useDay } from './day-context'
 import { useAction } from './use-action'
+import { useKeptOffline } from './use-kept-offline'
 
 const STEPS: Readonly<Record<LoadProgress['step'], string>> = {
   event: 'asking for the event',
@@ -62,10 +63,23 @@ export function LoadScreen({ onReady }: { readonly onReady: () => void }) {
 
 /** What this device can do, worst first, and the way on. */
 function Checked({ check, onReady }: { readonly check: DeviceCheck; readonly onReady: () => void }) {
+  const kept = useKeptOffline(`/${window.location.pathname.split('/')[1] ?? ''}`)
+  if (kept === 'looking') return <p role="status">Keeping these screens for when there is no network …</p>
+  const isReady = check.readyOffline && kept === 'yes'
   return (
     <section className="grid gap-3">
-      <h2 className="text-lg">{check.readyOffline ? 'Ready offline' : 'Not ready for offline'}</h2>
+      <h2 className="text-lg">{isReady ? 'Ready offline' : 'Not ready for offline'}</h2>
       <ul className="grid gap-2">
+        {kept === 'no' && (
+          <li>
+            <Notice
+              weight="news"
+              happened="This browser does not keep these screens."
+              kept="Records are kept all the same."
+              todo="Leave this page open all day, or use another browser: without a network it does not open again."
+            />
+          </li>
+        )}
         {check.problems.map((one) => (
           <li key={one.code}>
             <Notice weight="news" happened={one.what} kept={one.kept} todo={one.todo} />
@@ -74,7 +88,7 @@ function Checked({ check, onReady }: { readonly check: DeviceCheck; readonly onR
       </ul>
       {check.leftBytes !== null && <p className="text-muted">Room on this device: about {Math.round(check.leftBytes / 1_000_000)} MB.</p>}
       <Button size="large" onClick={onReady}>
-        {check.readyOffline ? 'Begin' : 'Go on all the same'}
+        {isReady ? 'Begin' : 'Go on all the same'}
       </Button>
     </section>
   )

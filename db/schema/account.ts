@@ -6,7 +6,9 @@ export const account = sqliteTable(
   'account',
   {
     id: text('id').primaryKey(),
-    clubId: text('club_id').notNull().references(() => club.id),
+    clubId: text('club_id')
+      .notNull()
+      .references(() => club.id),
     /** Lower-cased. */
     email: text('email').notNull(),
     name: text('name').notNull(),
@@ -24,8 +26,12 @@ export const signIn = sqliteTable(
   'sign_in',
   {
     idHash: text('id_hash').primaryKey(),
-    clubId: text('club_id').notNull().references(() => club.id),
-    accountId: text('account_id').notNull().references(() => account.id),
+    clubId: text('club_id')
+      .notNull()
+      .references(() => club.id),
+    accountId: text('account_id')
+      .notNull()
+      .references(() => account.id),
     createdAt: integer('created_at').notNull(),
     lastSeenAt: integer('last_seen_at').notNull(),
     /** End of the absolute lifetime. */

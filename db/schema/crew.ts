@@ -8,9 +8,15 @@ export const crewMember = sqliteTable(
   'crew_member',
   {
     id: text('id').primaryKey(),
-    clubId: text('club_id').notNull().references(() => club.id),
-    eventId: text('event_id').notNull().references(() => event.id),
-    personId: text('person_id').notNull().references(() => person.id),
+    clubId: text('club_id')
+      .notNull()
+      .references(() => club.id),
+    eventId: text('event_id')
+      .notNull()
+      .references(() => event.id),
+    personId: text('person_id')
+      .notNull()
+      .references(() => person.id),
     role: text('role', { enum: ['chief', 'scrutineer', 'helper', 'sign-on', 'marshal'] }).notNull(),
     state: text('state', { enum: ['waiting', 'accepted', 'refused', 'ended'] }).notNull(),
     /** SHA-256 of the secret the joining phone keeps until it is enrolled; null for people with an account. */
@@ -19,15 +25,22 @@ export const crewMember = sqliteTable(
     decidedAt: integer('decided_at'),
     decidedByAccountId: text('decided_by_account_id'),
   },
-  (table) => [uniqueIndex('crew_member_role').on(table.eventId, table.personId, table.role), index('crew_member_claim').on(table.claimHash)],
+  (table) => [
+    uniqueIndex('crew_member_role').on(table.eventId, table.personId, table.role),
+    index('crew_member_claim').on(table.claimHash),
+  ],
 )
 
 export const joinCode = sqliteTable(
   'join_code',
   {
     id: text('id').primaryKey(),
-    clubId: text('club_id').notNull().references(() => club.id),
-    eventId: text('event_id').notNull().references(() => event.id),
+    clubId: text('club_id')
+      .notNull()
+      .references(() => club.id),
+    eventId: text('event_id')
+      .notNull()
+      .references(() => event.id),
     tokenHash: text('token_hash').notNull(),
     role: text('role', { enum: ['scrutineer', 'helper', 'sign-on', 'marshal'] }).notNull(),
     expiresAt: integer('expires_at').notNull(),
@@ -42,8 +55,12 @@ export const device = sqliteTable(
   'device',
   {
     id: text('id').primaryKey(),
-    clubId: text('club_id').notNull().references(() => club.id),
-    eventId: text('event_id').notNull().references(() => event.id),
+    clubId: text('club_id')
+      .notNull()
+      .references(() => club.id),
+    eventId: text('event_id')
+      .notNull()
+      .references(() => event.id),
     kid: integer('kid').notNull(),
     name: text('name').notNull(),
     /** Raw Ed25519 public key, base64url. */
@@ -65,9 +82,15 @@ export const device = sqliteTable(
 export const devicePerson = sqliteTable(
   'device_person',
   {
-    clubId: text('club_id').notNull().references(() => club.id),
-    deviceId: text('device_id').notNull().references(() => device.id),
-    personId: text('person_id').notNull().references(() => person.id),
+    clubId: text('club_id')
+      .notNull()
+      .references(() => club.id),
+    deviceId: text('device_id')
+      .notNull()
+      .references(() => device.id),
+    personId: text('person_id')
+      .notNull()
+      .references(() => person.id),
     roles: text('roles', { mode: 'json' }).$type<readonly string[]>().notNull(),
   },
   (table) => [uniqueIndex('device_person_one').on(table.deviceId, table.personId)],
@@ -75,7 +98,9 @@ export const devicePerson = sqliteTable(
 
 /** The server's own signing key, one per club. */
 export const serverKey = sqliteTable('server_key', {
-  clubId: text('club_id').primaryKey().references(() => club.id),
+  clubId: text('club_id')
+    .primaryKey()
+    .references(() => club.id),
   publicKey: text('public_key').notNull(),
   /** PKCS #8, base64; the database file is as secret as this is. */
   privateKey: text('private_key').notNull(),

@@ -7,8 +7,12 @@ export const person = sqliteTable(
   'person',
   {
     id: text('id').primaryKey(),
-    clubId: text('club_id').notNull().references(() => club.id),
-    eventId: text('event_id').notNull().references(() => event.id),
+    clubId: text('club_id')
+      .notNull()
+      .references(() => club.id),
+    eventId: text('event_id')
+      .notNull()
+      .references(() => event.id),
     accountId: text('account_id'),
     name: text('name').notNull(),
     email: text('email'),
@@ -22,7 +26,9 @@ export const car = sqliteTable(
   'car',
   {
     id: text('id').primaryKey(),
-    clubId: text('club_id').notNull().references(() => club.id),
+    clubId: text('club_id')
+      .notNull()
+      .references(() => club.id),
     model: text('model').notNull(),
     colour: text('colour').notNull(),
     /** Upper case, no spaces. */
@@ -36,16 +42,24 @@ export const entry = sqliteTable(
   'entry',
   {
     id: text('id').primaryKey(),
-    clubId: text('club_id').notNull().references(() => club.id),
-    eventId: text('event_id').notNull().references(() => event.id),
-    carId: text('car_id').notNull().references(() => car.id),
+    clubId: text('club_id')
+      .notNull()
+      .references(() => club.id),
+    eventId: text('event_id')
+      .notNull()
+      .references(() => event.id),
+    carId: text('car_id')
+      .notNull()
+      .references(() => car.id),
     /** Its number in pass tokens, 1 to 65535, given per event, never reused. */
     code: integer('code').notNull(),
     /** As on the door: `007` is not `7`. */
     number: text('number').notNull(),
     /** As printed on the car, upper case with its spaces. */
     plate: text('plate').notNull(),
-    groupId: text('group_id').notNull().references(() => runGroup.id),
+    groupId: text('group_id')
+      .notNull()
+      .references(() => runGroup.id),
     facts: text('facts', { mode: 'json' }).$type<Readonly<Record<string, string | number | boolean | null>>>().notNull(),
     note: text('note').notNull(),
     passengerSeats: integer('passenger_seats').notNull(),
@@ -62,9 +76,15 @@ export const entry = sqliteTable(
 export const entryPerson = sqliteTable(
   'entry_person',
   {
-    clubId: text('club_id').notNull().references(() => club.id),
-    entryId: text('entry_id').notNull().references(() => entry.id),
-    personId: text('person_id').notNull().references(() => person.id),
+    clubId: text('club_id')
+      .notNull()
+      .references(() => club.id),
+    entryId: text('entry_id')
+      .notNull()
+      .references(() => entry.id),
+    personId: text('person_id')
+      .notNull()
+      .references(() => person.id),
     role: text('role', { enum: ['driver', 'passenger', 'instructor'] }).notNull(),
   },
   (table) => [primaryKey({ columns: [table.entryId, table.personId, table.role] })],
@@ -75,8 +95,12 @@ export const declaration = sqliteTable(
   'declaration',
   {
     id: text('id').primaryKey(),
-    clubId: text('club_id').notNull().references(() => club.id),
-    entryId: text('entry_id').notNull().references(() => entry.id),
+    clubId: text('club_id')
+      .notNull()
+      .references(() => club.id),
+    entryId: text('entry_id')
+      .notNull()
+      .references(() => entry.id),
     version: integer('version').notNull(),
     body: text('body', { mode: 'json' }).$type<Readonly<Record<string, unknown>>>().notNull(),
     signedAt: integer('signed_at'),
@@ -89,8 +113,12 @@ export const entryImport = sqliteTable(
   'entry_import',
   {
     id: text('id').primaryKey(),
-    clubId: text('club_id').notNull().references(() => club.id),
-    eventId: text('event_id').notNull().references(() => event.id),
+    clubId: text('club_id')
+      .notNull()
+      .references(() => club.id),
+    eventId: text('event_id')
+      .notNull()
+      .references(() => event.id),
     textHash: text('text_hash').notNull(),
     fileName: text('file_name').notNull(),
     added: integer('added').notNull(),

@@ -5,7 +5,9 @@ export const event = sqliteTable(
   'event',
   {
     id: text('id').primaryKey(),
-    clubId: text('club_id').notNull().references(() => club.id),
+    clubId: text('club_id')
+      .notNull()
+      .references(() => club.id),
     /** The event's number in pass tokens, 1 to 65535, never reused. */
     code: integer('code').notNull(),
     name: text('name').notNull(),
@@ -14,8 +16,12 @@ export const event = sqliteTable(
     timeZone: text('time_zone').notNull(),
     firstDay: text('first_day').notNull(),
     lastDay: text('last_day').notNull(),
-    checklistHash: text('checklist_hash').notNull().references(() => checklistText.hash),
-    limitsHash: text('limits_hash').notNull().references(() => limitsText.hash),
+    checklistHash: text('checklist_hash')
+      .notNull()
+      .references(() => checklistText.hash),
+    limitsHash: text('limits_hash')
+      .notNull()
+      .references(() => limitsText.hash),
     defaultDepth: text('default_depth', { enum: ['look-over', 'standard', 'full'] }).notNull(),
     /** Every car is seen, or the must-see ones plus a sample. */
     depthPolicy: text('depth_policy', { enum: ['all', 'must-see'] }).notNull(),
@@ -34,8 +40,12 @@ export const runGroup = sqliteTable(
   'run_group',
   {
     id: text('id').primaryKey(),
-    clubId: text('club_id').notNull().references(() => club.id),
-    eventId: text('event_id').notNull().references(() => event.id),
+    clubId: text('club_id')
+      .notNull()
+      .references(() => club.id),
+    eventId: text('event_id')
+      .notNull()
+      .references(() => event.id),
     name: text('name').notNull(),
     order: integer('order').notNull(),
     firstSessionAt: integer('first_session_at'),

@@ -6,9 +6,13 @@ import { event } from './event'
 export const record = sqliteTable(
   'record',
   {
-    eventId: text('event_id').notNull().references(() => event.id),
+    eventId: text('event_id')
+      .notNull()
+      .references(() => event.id),
     seq: integer('seq').notNull(),
-    clubId: text('club_id').notNull().references(() => club.id),
+    clubId: text('club_id')
+      .notNull()
+      .references(() => club.id),
     id: text('id').notNull(),
     /** The signed text, byte for byte as it came. */
     jws: text('jws').notNull(),
@@ -38,8 +42,12 @@ export const note = sqliteTable(
   'note',
   {
     hash: text('hash').primaryKey(),
-    clubId: text('club_id').notNull().references(() => club.id),
-    eventId: text('event_id').notNull().references(() => event.id),
+    clubId: text('club_id')
+      .notNull()
+      .references(() => club.id),
+    eventId: text('event_id')
+      .notNull()
+      .references(() => event.id),
     salt: text('salt').notNull(),
     text: text('text').notNull(),
     /** Seq of the event's log when it came, so that a pull finds it. */
@@ -52,9 +60,13 @@ export const note = sqliteTable(
 export const subjectState = sqliteTable(
   'subject_state',
   {
-    eventId: text('event_id').notNull().references(() => event.id),
+    eventId: text('event_id')
+      .notNull()
+      .references(() => event.id),
     subjectKey: text('subject_key').notNull(),
-    clubId: text('club_id').notNull().references(() => club.id),
+    clubId: text('club_id')
+      .notNull()
+      .references(() => club.id),
     /** Seq it was folded at and venue day it was folded for. */
     seq: integer('seq').notNull(),
     day: text('day').notNull(),
@@ -68,9 +80,13 @@ export const subjectState = sqliteTable(
 export const passState = sqliteTable(
   'pass_state',
   {
-    eventId: text('event_id').notNull().references(() => event.id),
+    eventId: text('event_id')
+      .notNull()
+      .references(() => event.id),
     recordHash: text('record_hash').notNull(),
-    clubId: text('club_id').notNull().references(() => club.id),
+    clubId: text('club_id')
+      .notNull()
+      .references(() => club.id),
     subjectKey: text('subject_key').notNull(),
     passId: text('pass_id').notNull(),
     typedCode: text('typed_code').notNull(),
@@ -85,8 +101,12 @@ export const scan = sqliteTable(
   'scan',
   {
     id: text('id').primaryKey(),
-    clubId: text('club_id').notNull().references(() => club.id),
-    eventId: text('event_id').notNull().references(() => event.id),
+    clubId: text('club_id')
+      .notNull()
+      .references(() => club.id),
+    eventId: text('event_id')
+      .notNull()
+      .references(() => event.id),
     deviceId: text('device_id').notNull(),
     at: integer('at').notNull(),
     answer: text('answer', { enum: ['PASSED', 'HOLD', 'CHECK'] }).notNull(),
@@ -105,7 +125,9 @@ export const audit = sqliteTable(
   'audit',
   {
     id: text('id').primaryKey(),
-    clubId: text('club_id').notNull().references(() => club.id),
+    clubId: text('club_id')
+      .notNull()
+      .references(() => club.id),
     eventId: text('event_id'),
     at: integer('at').notNull(),
     accountId: text('account_id'),

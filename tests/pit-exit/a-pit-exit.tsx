@@ -25,7 +25,15 @@ export async function aPassedCar() {
 /** Sees a person's helmet and their fit in the car, and gives the band. */
 export async function bandFor(day: DayClient, car: string, person: string): Promise<void> {
   for (const subject of [{ person }, { fit: car, person }]) {
-    await one(day, { kind: 'presented', subject, checklist: CHECKLIST_HASH, limits: LIMITS_HASH, declaration: null, facts: {}, depth: 'standard' })
+    await one(day, {
+      kind: 'presented',
+      subject,
+      checklist: CHECKLIST_HASH,
+      limits: LIMITS_HASH,
+      declaration: null,
+      facts: {},
+      depth: 'standard',
+    })
     const key = 'fit' in subject ? (`fit:${car}:${person}` as const) : (`person:${person}` as const)
     for (const check of day.state(key).open) await one(day, { ...aFinding(day, car, check, 'ok'), subject } as never)
   }

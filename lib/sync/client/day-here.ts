@@ -19,14 +19,6 @@ export function dayHere(): Promise<DayClient | null> {
   return opening
 }
 
-/** To be called after this browser was enrolled anew: the next `dayHere` opens that event. */
-export async function forgetOpenDay(): Promise<void> {
-  const before = opening
-  opening = null
-  const client = await before?.catch(() => null)
-  client?.close()
-}
-
 async function open(): Promise<DayClient | null> {
   const latest = (await enrolledHere(browserStores))[0]
   if (latest === undefined) return null

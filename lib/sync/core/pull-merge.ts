@@ -1,5 +1,4 @@
 import type { SyncPullResponse } from '@/lib/contracts/sync-pull'
-import { CHAIN_START } from './chain'
 
 /** Where a device stands in the event's log. */
 export interface PullCursor {
@@ -7,8 +6,6 @@ export interface PullCursor {
   /** Chain hash at `seq`. */
   readonly chain: string
 }
-
-export const PULL_START: PullCursor = { seq: 0, chain: CHAIN_START }
 
 export type PulledRecord = SyncPullResponse['records'][number]
 
