@@ -30,7 +30,7 @@ export function AnswerView({ answer, asked, asking, strip, held, onHold }: Answe
   const keep = useEffectEvent(() => keepScan(localStorage, day.status(), asked, answer))
   // What was answered first is kept, and each time the answer changes while it stands: a tap on who is aboard, a hold made here.
   useEffect(() => keep(), [answer.answer, answer.code, asked])
-  const state = answer.code === 'blocked' ? 'held' : SHAPES[answer.answer]
+  const state = stopsOf(answer) ? 'held' : SHAPES[answer.answer]
   const leave = (event: MouseEvent<HTMLElement>) => {
     if (event.target instanceof Element && event.target.closest('button, input, label') === null) asking.next()
   }
@@ -66,9 +66,15 @@ export function AnswerView({ answer, asked, asking, strip, held, onHold }: Answe
   )
 }
 
+/** What stops the car itself, where that is among the reasons: it is what the driver has to be told, so it is said first. */
+function stopsOf(answer: PitAnswer): PitAnswer['reasons'][number] | null {
+  return answer.answer === 'HOLD' ? (answer.reasons.find(({ code }) => code === 'blocked') ?? null) : null
+}
+
 /** Of a car that may go, what to compare; of any other, why not. */
 function linesOf(answer: PitAnswer): readonly string[] {
-  return [...new Set(answer.answer === 'PASSED' ? compareLines(answer) : answer.why)]
+  if (answer.answer === 'PASSED') return compareLines(answer)
+  return [...new Set([...(stopsOf(answer)?.why ?? []), ...answer.why])]
 }
 
 function compareLines({ plateTail, colour, model }: PitAnswer): readonly string[] {
@@ -78,7 +84,7 @@ function compareLines({ plateTail, colour, model }: PitAnswer): readonly string[
 function Foot({ answer, asked, asking }: Pick<AnswerViewProps, 'answer' | 'asked' | 'asking'>) {
   return (
     <div className="grid gap-2">
-      <p className="text-xl font-bold">{answer.todo}</p>
+      <p className="text-xl font-bold">{stopsOf(answer)?.todo ?? answer.todo}</p>
       {answer.answer !== 'PASSED' && <p>{compareLines(answer).join(' · ')}</p>}
       <PeopleAboard answer={answer} aboard={asked.aboard} onAboard={asking.setAboard} />
       {answer.passengerSeatUsable !== null && answer.answer !== 'HOLD' && (
