@@ -1,4 +1,4 @@
-import { cleanup, screen, within } from '@testing-library/react'
+import { cleanup, screen, waitFor, within } from '@testing-library/react'
 import userEvent from '@testing-library/user-event'
 import { expect, test, vi } from 'vitest'
 import { axeFindings } from '../bay/axe-findings'
@@ -95,8 +95,12 @@ test('[P5] a read-back that agrees makes an old list count as fresh, and is reco
   expect(await screen.findByText('The count agrees: this list counts as fresh from now.')).toBeInTheDocument()
   expect(screen.getByText('held now')).toBeInTheDocument()
   const event = pit.marshal.day.status().event?.id ?? ''
-  const notes = pit.marshal.day.log(`event:${event}`).flatMap(({ record }) => ('notes' in record ? (record.notes ?? []) : []))
-  expect(notes.map((hash) => pit.marshal.day.note(hash))).toEqual([expect.stringContaining('1 live passes heard, 1 counted here; agrees.')])
+  const said = () =>
+    pit.marshal.day
+      .log(`event:${event}`)
+      .flatMap(({ record }) => ('notes' in record ? (record.notes ?? []) : []))
+      .map((hash) => pit.marshal.day.note(hash))
+  await waitFor(() => expect(said()).toEqual([expect.stringContaining('1 live passes heard, 1 counted here; agrees.')]))
 })
 
 test('[P5] a read-back that does not agree still stops what it names, over a reload too, and the list stays old', async () => {

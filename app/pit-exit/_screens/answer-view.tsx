@@ -86,7 +86,10 @@ function Foot({ answer, asked, asking }: Pick<AnswerViewProps, 'answer' | 'asked
     <div className="grid gap-2">
       <p className="text-xl font-bold">{stopsOf(answer)?.todo ?? answer.todo}</p>
       {answer.answer !== 'PASSED' && <p>{compareLines(answer).join(' · ')}</p>}
-      <PeopleAboard answer={answer} aboard={asked.aboard} onAboard={asking.setAboard} />
+      {/* Of a car that stays, nobody reads that somebody may drive; but who was tapped aboard by mistake can be tapped anew. */}
+      {(answer.answer !== 'HOLD' || asked.aboard !== null) && (
+        <PeopleAboard answer={answer} aboard={asked.aboard} onAboard={asking.setAboard} />
+      )}
       {answer.passengerSeatUsable !== null && answer.answer !== 'HOLD' && (
         <p>{answer.passengerSeatUsable ? 'passenger seat usable' : 'no passenger: the seat was not passed for one'}</p>
       )}
