@@ -31,7 +31,9 @@ function aStatus(given: Partial<DayStatus> = {}): DayStatus {
 test.each([
   ['all is well', {}, 'in step · all sent'],
   ['no live line', { link: 'polling' }, 'last heard 07:12 · all sent'],
-  ['no network', { link: 'offline', unsent: 14, unsentSince: at(7, 20) }, 'offline since 07:12 · 14 to send since 07:20'],
+  ['no network', { link: 'offline', unsent: 14, unsentSince: at(7, 20) }, 'offline since 07:12 · 14 to send'],
+  ['something is stuck longer', { link: 'offline', unsent: 14, unsentSince: at(7, 5) }, 'offline since 07:12 · 14 to send since 07:05'],
+  ['a line, and yet not sent', { unsent: 2, unsentSince: at(7, 20) }, 'in step · 2 to send since 07:20'],
   ['never heard, and no network', { link: 'offline', lastPullAt: null }, 'offline · all sent'],
   ['not asked yet', { link: 'polling', lastPullAt: null }, 'not heard from the server yet · all sent'],
 ] as const)('the strip says what waits to be sent and since when: %s', (_, given, words) => {

@@ -26,7 +26,7 @@ export function PassPanel({ walk }: { readonly walk: Walk }) {
     if (await act(() => day.issuePass(request))) forgetWalk(localStorage, subjectKey(walk.subject))
   }
   return (
-    <section className="grid gap-3" aria-label="Pass">
+    <section className="grid grid-cols-[minmax(0,1fr)] gap-3" aria-label="Pass">
       <ProblemNotice problem={problem} />
       {pass && <IssuedPass pass={pass} entry={entry} />}
       {!mayIssue && !pass && <p>Ready for its pass. A scrutineer issues it.</p>}

@@ -1,3 +1,6 @@
+'use client'
+
+import { useEffect, useRef } from 'react'
 import { OutcomeShape, type OutcomeState } from '@/app/_ui/outcome-shape'
 import type { WalkStop } from '@/lib/walk/next-stop'
 import type { WalkItem, WalkPlace } from '@/lib/walk/walk-plan'
@@ -18,8 +21,14 @@ export function StopPicker({ here, stop, onPick }: StopPickerProps) {
       ? [{ check: null, words: 'the rest', state: restState(here.together), seeAgain: here.together.some((item) => item.seeAgain) }]
       : []),
   ]
+  const list = useRef<HTMLOListElement>(null)
+  useEffect(() => {
+    const step = list.current?.querySelector<HTMLElement>('[aria-current=step]')
+    // The row scrolls, the page must not: where one is stands a little in from the left.
+    if (list.current && step) list.current.scrollLeft = step.offsetLeft - list.current.offsetLeft - 48
+  }, [current, here])
   return (
-    <ol className="mt-2 flex gap-1 overflow-x-auto pb-1" aria-label={`Checks at ${here.place.title}`}>
+    <ol ref={list} className="mt-2 flex gap-1 overflow-x-auto pb-1" aria-label={`Checks at ${here.place.title}`}>
       {stops.map(({ check, words, state, seeAgain }) => (
         <li key={check ?? 'rest'} className="shrink-0">
           <button

@@ -42,7 +42,7 @@ export function SubjectWalk({ walk, base, told, undo }: SubjectWalkProps) {
   }
   const isPresented = state.presentedHeads.length > 0
   return (
-    <div className="grid gap-4 px-4 pb-6">
+    <div className="grid grid-cols-[minmax(0,1fr)] gap-4 px-4 pt-3 pb-6">
       <WalkHead walk={walk} book={book} base={base} />
       <BlockList walk={walk} />
       {isPresented && !changing ? (
