@@ -61,7 +61,8 @@ afterAll(async () => {
 })
 
 afterEach(() => {
-  for (const device of [bay, board, ...(marshal ? [marshal] : [])]) expect(device.complaints(), `console of ${device.name}`).toEqual([])
+  for (const device of [bay, board, ...(marshal ? [marshal] : [])])
+    expect(device.complaints(), `console of ${device.name}: ${device.complaints().join(' | ')}`).toEqual([])
 })
 
 // The tests below are one day, told in order: each goes on where the one before it ended.
