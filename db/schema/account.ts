@@ -42,3 +42,21 @@ export const signIn = sqliteTable(
   },
   (table) => [index('sign_in_account').on(table.accountId)],
 )
+
+/** A link that lets somebody choose a password: invited as crew or organiser, or forgotten. Used once. Only the SHA-256 of its token is kept. */
+export const passwordLink = sqliteTable(
+  'password_link',
+  {
+    tokenHash: text('token_hash').primaryKey(),
+    clubId: text('club_id')
+      .notNull()
+      .references(() => club.id),
+    accountId: text('account_id')
+      .notNull()
+      .references(() => account.id),
+    createdAt: integer('created_at').notNull(),
+    expiresAt: integer('expires_at').notNull(),
+    usedAt: integer('used_at'),
+  },
+  (table) => [index('password_link_account').on(table.accountId)],
+)

@@ -1,4 +1,5 @@
 import { index, integer, primaryKey, sqliteTable, text, uniqueIndex } from 'drizzle-orm/sqlite-core'
+import { account } from './account'
 import { club } from './club'
 import { event, runGroup } from './event'
 
@@ -17,6 +18,8 @@ export const person = sqliteTable(
     name: text('name').notNull(),
     email: text('email'),
     mobile: text('mobile'),
+    /** Under age at the event: a consent is asked. No birth date is kept. */
+    minor: integer('minor', { mode: 'boolean' }).notNull().default(false),
   },
   (table) => [index('person_event').on(table.eventId)],
 )
@@ -33,6 +36,10 @@ export const car = sqliteTable(
     colour: text('colour').notNull(),
     /** Upper case, no spaces. */
     plate: text('plate').notNull(),
+    /** The entrant whose car it is; null while nobody has claimed it. */
+    ownerAccountId: text('owner_account_id').references(() => account.id),
+    /** Facts and labels as its owner last gave them. */
+    facts: text('facts', { mode: 'json' }).$type<Readonly<Record<string, string | number | boolean | null>>>().notNull().default({}),
   },
   (table) => [index('car_plate').on(table.clubId, table.plate)],
 )
@@ -64,6 +71,8 @@ export const entry = sqliteTable(
     note: text('note').notNull(),
     passengerSeats: integer('passenger_seats').notNull(),
     withdrawn: integer('withdrawn', { mode: 'boolean' }).notNull(),
+    /** Moved on by every change of the row, so that two people who edit it see each other. */
+    version: integer('version').notNull().default(1),
   },
   (table) => [
     uniqueIndex('entry_code').on(table.eventId, table.code),
@@ -106,6 +115,72 @@ export const declaration = sqliteTable(
     signedAt: integer('signed_at'),
   },
   (table) => [uniqueIndex('declaration_version').on(table.entryId, table.version)],
+)
+
+/** A link that lets the person of an entry in without a password. Only the SHA-256 of its token is kept. */
+export const entryLink = sqliteTable(
+  'entry_link',
+  {
+    tokenHash: text('token_hash').primaryKey(),
+    clubId: text('club_id')
+      .notNull()
+      .references(() => club.id),
+    entryId: text('entry_id')
+      .notNull()
+      .references(() => entry.id),
+    personId: text('person_id')
+      .notNull()
+      .references(() => person.id),
+    createdAt: integer('created_at').notNull(),
+    expiresAt: integer('expires_at').notNull(),
+    revokedAt: integer('revoked_at'),
+  },
+  (table) => [index('entry_link_entry').on(table.entryId)],
+)
+
+/** A piece of an entrant's kit with its labels: helmet, suit, head restraint, belts that move from car to car. */
+export const kit = sqliteTable(
+  'kit',
+  {
+    id: text('id').primaryKey(),
+    clubId: text('club_id')
+      .notNull()
+      .references(() => club.id),
+    accountId: text('account_id')
+      .notNull()
+      .references(() => account.id),
+    kind: text('kind', { enum: ['helmet', 'head-restraint', 'suit', 'gloves', 'other'] }).notNull(),
+    name: text('name').notNull(),
+    /** Values of the label by the field of the check that judges it. */
+    values: text('values', { mode: 'json' }).$type<Readonly<Record<string, string | number | boolean | null>>>().notNull(),
+    photoHash: text('photo_hash'),
+    retired: integer('retired', { mode: 'boolean' }).notNull().default(false),
+    updatedAt: integer('updated_at').notNull(),
+  },
+  (table) => [index('kit_account').on(table.accountId)],
+)
+
+/** A pass token printed ahead by the server. It opens nothing until a scrutineer brings it alive with a pass record. */
+export const printedPass = sqliteTable(
+  'printed_pass',
+  {
+    eventId: text('event_id')
+      .notNull()
+      .references(() => event.id),
+    /** Counter of the server's own kid, 0; never reused. */
+    counter: integer('counter').notNull(),
+    clubId: text('club_id')
+      .notNull()
+      .references(() => club.id),
+    entryId: text('entry_id')
+      .notNull()
+      .references(() => entry.id),
+    token: text('token').notNull(),
+    /** Venue day it is for. */
+    day: text('day').notNull(),
+    printedAt: integer('printed_at').notNull(),
+  },
+  (table) => [primaryKey({ columns: [table.eventId, table.counter] }), index('printed_pass_entry').on(table.entryId, table.day)],
 )
 
 /** A list that was imported: its text's hash and what came of it. */

@@ -1,4 +1,4 @@
-import { index, integer, sqliteTable, text, uniqueIndex } from 'drizzle-orm/sqlite-core'
+import { index, integer, real, sqliteTable, text, uniqueIndex } from 'drizzle-orm/sqlite-core'
 import { club } from './club'
 
 export const event = sqliteTable(
@@ -23,12 +23,18 @@ export const event = sqliteTable(
       .notNull()
       .references(() => limitsText.hash),
     defaultDepth: text('default_depth', { enum: ['look-over', 'standard', 'full'] }).notNull(),
+    /** Closed circuit, or a session on which road law binds too; decides which checks apply. */
+    kindOfDay: text('kind_of_day', { enum: ['closed-circuit', 'public-road'] })
+      .notNull()
+      .default('closed-circuit'),
     /** Every car is seen, or the must-see ones plus a sample. */
     depthPolicy: text('depth_policy', { enum: ['all', 'must-see'] }).notNull(),
     listStaleMinutes: integer('list_stale_minutes').notNull(),
     /** Counters that are never wound back: next device kid and next entry code. */
     nextKid: integer('next_kid').notNull(),
     nextEntryCode: integer('next_entry_code').notNull(),
+    /** With `must-see`: one car in so many is seen whatever it is; 0 for none. */
+    sampleEvery: integer('sample_every').notNull().default(0),
     /** Moved on by every change of the snapshot that devices load. */
     snapshotVersion: integer('snapshot_version').notNull(),
     createdAt: integer('created_at').notNull(),
@@ -51,6 +57,32 @@ export const runGroup = sqliteTable(
     firstSessionAt: integer('first_session_at'),
   },
   (table) => [uniqueIndex('run_group_name').on(table.eventId, table.name), index('run_group_event').on(table.eventId)],
+)
+
+/** One line of the timetable: a group's session with its noise limit, or a time in which the bay stands still for it. */
+export const timetableBlock = sqliteTable(
+  'timetable_block',
+  {
+    id: text('id').primaryKey(),
+    clubId: text('club_id')
+      .notNull()
+      .references(() => club.id),
+    eventId: text('event_id')
+      .notNull()
+      .references(() => event.id),
+    /** Venue day. */
+    day: text('day').notNull(),
+    kind: text('kind', { enum: ['session', 'briefing', 'engine-curfew', 'break'] }).notNull(),
+    /** Whose it is; null: everybody's. A session has always one. */
+    groupId: text('group_id').references(() => runGroup.id),
+    /** The group's own count over the whole event, from 1; null for what is no session. */
+    session: integer('session'),
+    startsAt: integer('starts_at').notNull(),
+    endsAt: integer('ends_at').notNull(),
+    /** dB(A), static; null: no limit of its own. */
+    noiseLimitDb: real('noise_limit_db'),
+  },
+  (table) => [index('timetable_block_event').on(table.eventId, table.startsAt)],
 )
 
 /** Published checklists and limits by SHA-256 of their file, so that what a record pins can always be read again. */

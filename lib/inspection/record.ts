@@ -48,6 +48,9 @@ const envelope = {
   shown: z.strictObject({ number: z.string().check(z.maxLength(12)), plateTail: z.string().check(z.maxLength(6)) }),
 }
 
+/** Keyed in from a paper card: who looked, when by the card, and the photograph of the sheet. The actor is who keyed it in. */
+const paper = z.strictObject({ seenBy: id, seenAt: instantMs, sheet: z.optional(hash) })
+
 const outcome = z.enum(['ok', 'advisory', 'fail', 'could-not-see', 'unseen'])
 const reason = z.nullable(code)
 
@@ -61,6 +64,7 @@ const presented = z.strictObject({
   declaration: z.nullable(z.strictObject({ id, version: z.int() })),
   facts: figures,
   depth: z.enum(['look-over', 'standard', 'full']),
+  paper: z.optional(paper),
 })
 
 const finding = z.strictObject({
@@ -83,6 +87,7 @@ const finding = z.strictObject({
   photos: z.optional(hashes),
   /** Hash of the earlier event's finding that this one carries forward (rule F11). */
   carriedFrom: z.optional(hash),
+  paper: z.optional(paper),
 })
 
 const ruling = z.strictObject({

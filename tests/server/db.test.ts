@@ -22,11 +22,13 @@ function anEventWithOneOfEach() {
   run("INSERT INTO checklist_text VALUES ('h', '{}')")
   run("INSERT INTO limits_text VALUES ('h', '{}')")
   run(
-    "INSERT INTO event VALUES ('e', 'c', 1, 'Day', 'Ottermere Ring', 'Europe/London', '2026-05-09', '2026-05-10', 'h', 'h', 'standard', 'all', 30, 1, 1, 1, 0)",
+    "INSERT INTO event (id, club_id, code, name, venue, time_zone, first_day, last_day, checklist_hash, limits_hash, default_depth, depth_policy, list_stale_minutes, next_kid, next_entry_code, snapshot_version, created_at) VALUES ('e', 'c', 1, 'Day', 'Ottermere Ring', 'Europe/London', '2026-05-09', '2026-05-10', 'h', 'h', 'standard', 'all', 30, 1, 1, 1, 0)",
   )
   run("INSERT INTO run_group VALUES ('g', 'c', 'e', 'Novice', 1, NULL)")
-  run("INSERT INTO car VALUES ('car', 'c', 'Halden', 'red', 'AB12CDE')")
-  run("INSERT INTO entry VALUES ('en', 'c', 'e', 'car', 1, '47', 'AB12 CDE', 'g', '{}', '', 0, 0)")
+  run("INSERT INTO car (id, club_id, model, colour, plate) VALUES ('car', 'c', 'Halden', 'red', 'AB12CDE')")
+  run(
+    "INSERT INTO entry (id, club_id, event_id, car_id, code, number, plate, group_id, facts, note, passenger_seats, withdrawn) VALUES ('en', 'c', 'e', 'car', 1, '47', 'AB12 CDE', 'g', '{}', '', 0, 0)",
+  )
   run(record('r1', 1))
   run("INSERT INTO scan VALUES ('s', 'c', 'e', 'd', 0, 'HOLD', 'dead-pass', NULL, NULL, 'camera', '[]')")
   run("INSERT INTO audit VALUES ('a', 'c', 'e', 0, NULL, 'x', '{}')")
@@ -45,7 +47,7 @@ describe('the served database', () => {
   test('commits are durable: WAL with synchronous FULL, foreign keys on', () => {
     expect(database.$client.pragma('journal_mode', { simple: true })).toBe('wal')
     expect(database.$client.pragma('synchronous', { simple: true })).toBe(2)
-    expect(() => run("INSERT INTO car VALUES ('x', 'nobody', 'm', 'c', 'p')")).toThrow(/FOREIGN KEY/)
+    expect(() => run("INSERT INTO car (id, club_id, model, colour, plate) VALUES ('x', 'nobody', 'm', 'c', 'p')")).toThrow(/FOREIGN KEY/)
   })
 
   test('a text in a number column is refused: every table is STRICT', () => {

@@ -1,7 +1,7 @@
 import 'server-only'
 import { and, asc, desc, eq, inArray } from 'drizzle-orm'
 import type { Db } from '@/db/client'
-import { car, crewMember, declaration, device, entry, entryPerson, type event, person, runGroup } from '@/db/schema'
+import { car, crewMember, declaration, device, entry, entryPerson, type event, person, runGroup, timetableBlock } from '@/db/schema'
 import type { DaySnapshot } from '@/lib/contracts/day-snapshot'
 import { plateTail } from '@/lib/pass/plate-tail'
 import { sha256 } from '@/lib/platform/sha256'
@@ -58,21 +58,36 @@ function readRows(
   row: typeof event.$inferSelect,
   publicOrigin: string,
 ): Omit<DaySnapshot, 'version' | 'checklists' | 'limits'> {
-  const { id, code, name, venue, timeZone, firstDay, lastDay, checklistHash, limitsHash, listStaleMinutes, defaultDepth } = row
+  const { id, code, name, venue, timeZone, firstDay, lastDay, checklistHash, limitsHash, listStaleMinutes, defaultDepth, kindOfDay } = row
   const people = database
-    .select({ id: person.id, name: person.name })
+    .select({ id: person.id, name: person.name, minor: person.minor })
     .from(person)
     .where(eq(person.eventId, id))
     .orderBy(asc(person.name))
     .all()
   return {
-    event: { id, code, name, venue, timeZone, firstDay, lastDay, checklistHash, limitsHash, listStaleMinutes, defaultDepth, publicOrigin },
+    event: {
+      id,
+      code,
+      name,
+      venue,
+      timeZone,
+      firstDay,
+      lastDay,
+      checklistHash,
+      limitsHash,
+      listStaleMinutes,
+      defaultDepth,
+      kindOfDay,
+      publicOrigin,
+    },
     groups: database
       .select({ id: runGroup.id, name: runGroup.name, order: runGroup.order, firstSessionAt: runGroup.firstSessionAt })
       .from(runGroup)
       .where(eq(runGroup.eventId, id))
       .orderBy(asc(runGroup.order))
       .all(),
+    timetable: readTimetable(database, id),
     entries: readEntries(database, id),
     people,
     certificates: database
@@ -112,11 +127,32 @@ function readEntries(database: Db, eventId: string): DaySnapshot['entries'] {
       group: each.entry.groupId,
       facts: { ...each.entry.facts },
       declaration: signed === undefined ? null : { id: signed.id, version: signed.version },
+      declared: {},
+      history: [],
       people: (aboard.get(each.entry.id) ?? []).map(({ personId, role }) => ({ person: personId, role })),
       withdrawn: each.entry.withdrawn,
       note: each.entry.note,
     }
   })
+}
+
+function readTimetable(database: Db, eventId: string): DaySnapshot['timetable'] {
+  return database
+    .select()
+    .from(timetableBlock)
+    .where(eq(timetableBlock.eventId, eventId))
+    .orderBy(asc(timetableBlock.startsAt), asc(timetableBlock.id))
+    .all()
+    .map(({ id, day, kind, groupId, session, startsAt, endsAt, noiseLimitDb }) => ({
+      id,
+      day,
+      kind,
+      group: groupId,
+      session,
+      startsAt,
+      endsAt,
+      noiseLimitDb,
+    }))
 }
 
 function readCrew(database: Db, eventId: string, names: ReadonlyMap<string, string>): DaySnapshot['crew'] {
