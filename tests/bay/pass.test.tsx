@@ -10,7 +10,7 @@ test('a pass can be issued only once the car has passed', async () => {
   const [first, ...rest] = bay.state().open as [string, ...string[]]
   for (const check of rest) await finds(bay.phone.day, bay.car, check, 'ok')
   bay.open()
-  expect(screen.getByText('in progress')).toBeVisible()
+  expect(await screen.findByText('in progress')).toBeVisible()
   expect(screen.queryByRole('button', { name: ISSUE })).toBeNull()
 
   await finds(bay.phone.day, bay.car, first, 'ok')

@@ -9,7 +9,7 @@ const presented = (bay: Awaited<ReturnType<typeof aBay>>) => bay.state().present
 test('what nobody has said is not chosen beforehand, and stays unknown', async () => {
   const bay = await aBay({ isShipped: true })
   bay.open()
-  expect(screen.getByRole('radio', { name: 'Harness' })).not.toBeChecked()
+  expect(await screen.findByRole('radio', { name: 'Harness' })).not.toBeChecked()
   expect(screen.getByRole('radio', { name: 'Road belts' })).not.toBeChecked()
   expect(screen.getByText(/^Not answered: belts/)).toBeVisible()
   await bay.user.click(screen.getByRole('radio', { name: 'Harness' }))

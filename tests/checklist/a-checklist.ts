@@ -1,4 +1,4 @@
-import { openBook } from '@/lib/checklist/open-book'
+import { openCheckedBook } from '@/lib/checklist/open-checked-book'
 import { parseChecklist } from '@/lib/checklist/parse-checklist'
 import type { Book } from '@/lib/checklist/book'
 import type { Limits } from '@/lib/checklist/checklist'
@@ -104,7 +104,7 @@ export function aChecklistWith(...checks: readonly Json[]): Json {
 export function aBook(json: Json = aChecklist(), rules: Limits['rules'] = {}): Book {
   const parsed = parseChecklist(json)
   if (!parsed.ok) throw new Error(JSON.stringify(parsed.problems))
-  return openBook(
+  return openCheckedBook(
     parsed.checklist,
     { id: 'none', version: 1, title: 'No limits of its own', rules },
     { checklist: 'c'.repeat(64), limits: 'd'.repeat(64) },

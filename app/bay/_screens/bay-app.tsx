@@ -1,12 +1,13 @@
 'use client'
 
+import { Suspense, useEffect } from 'react'
 import { CrewGate } from '@/app/_crew/crew-gate'
 import { useDay } from '@/app/_crew/day-context'
 import { goTo, useLocation } from '@/app/_crew/use-location'
 import { Button } from '@/app/_ui/button'
 import { Notice } from '@/app/_ui/notice'
 import { useDayEntries } from '@/lib/sync/client/use-day'
-import { CarScreen } from './car-screen'
+import { CarScreen, fetchCarScreen } from './car-screen-when-needed'
 import { FindCar } from './find-car'
 
 /** The bay's screens, behind the gate of every crew device. */
@@ -22,10 +23,22 @@ export function BayApp() {
 export function BayScreens() {
   // Drawn again when an entry changes: a record says what number its screen showed (rule T1), so the screen may never lag behind.
   const entries = useDayEntries(useDay())
+  useEffect(fetchCarScreen, [])
   const [, , what, id, ...rest] = (useLocation() ?? '/bay').split('/')
   if (what === undefined || what === '') return <FindCar />
   const entry = what === 'car' ? entries.find((one) => one.id === id) : undefined
-  if (entry) return <CarScreen key={entry.id} entry={entry} rest={rest} />
+  if (entry)
+    return (
+      <Suspense
+        fallback={
+          <p role="status" className="p-6">
+            Opening {entry.number} …
+          </p>
+        }
+      >
+        <CarScreen key={entry.id} entry={entry} rest={rest} />
+      </Suspense>
+    )
   return (
     <main>
       <Notice

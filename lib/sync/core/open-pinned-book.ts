@@ -8,10 +8,10 @@ export interface PinnedTexts {
   readonly limits: Readonly<Record<string, unknown>>
 }
 
-/** Opens the book that a `presented` pins; null where a text is not at hand or is none, which leaves everything not seen. */
-export function openPinnedBook(texts: PinnedTexts, checklistHash: string, limitsHash: string): Book | null {
+/** Opens the book that a `presented` pins; null where a text is not at hand or is none, which leaves everything not seen. The server opens with `openCheckedBook`. */
+export function openPinnedBook(texts: PinnedTexts, checklistHash: string, limitsHash: string, open = openBook): Book | null {
   const checklist = checklistSchema.safeParse(texts.checklists[checklistHash])
   const limits = limitsSchema.safeParse(texts.limits[limitsHash])
   if (!checklist.success || !limits.success) return null
-  return openBook(checklist.data, limits.data, { checklist: checklistHash, limits: limitsHash })
+  return open(checklist.data, limits.data, { checklist: checklistHash, limits: limitsHash })
 }

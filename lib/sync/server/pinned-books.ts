@@ -3,6 +3,7 @@ import { eq } from 'drizzle-orm'
 import type { Db } from '@/db/client'
 import { checklistText, limitsText } from '@/db/schema'
 import type { Book } from '@/lib/checklist/book'
+import { openCheckedBook } from '@/lib/checklist/open-checked-book'
 import { openPinnedBook } from '../core/open-pinned-book'
 
 const books = new Map<string, Book>()
@@ -15,7 +16,8 @@ export function pinnedBook(database: Db, checklistHash: string, limitsHash: stri
   const checklist = checklistBody(database, checklistHash)
   const limits = limitsBody(database, limitsHash)
   if (checklist === null || limits === null) return null
-  const book = openPinnedBook({ checklists: { [checklistHash]: checklist }, limits: { [limitsHash]: limits } }, checklistHash, limitsHash)
+  const texts = { checklists: { [checklistHash]: checklist }, limits: { [limitsHash]: limits } }
+  const book = openPinnedBook(texts, checklistHash, limitsHash, openCheckedBook)
   if (book !== null) books.set(name, book)
   return book
 }
