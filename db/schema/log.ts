@@ -56,29 +56,9 @@ export const note = sqliteTable(
   (table) => [index('note_event').on(table.eventId, table.seq)],
 )
 
-/** Cache of the fold per subject; rebuilt from the log it must be equal. */
-export const subjectState = sqliteTable(
-  'subject_state',
-  {
-    eventId: text('event_id')
-      .notNull()
-      .references(() => event.id),
-    subjectKey: text('subject_key').notNull(),
-    clubId: text('club_id')
-      .notNull()
-      .references(() => club.id),
-    /** Seq it was folded at and venue day it was folded for. */
-    seq: integer('seq').notNull(),
-    day: text('day').notNull(),
-    verdict: text('verdict').notNull(),
-    body: text('body', { mode: 'json' }).$type<Readonly<Record<string, unknown>>>().notNull(),
-  },
-  (table) => [primaryKey({ columns: [table.eventId, table.subjectKey] })],
-)
-
-/** Cache of what has become of each pass and band. */
-export const passState = sqliteTable(
-  'pass_state',
+/** By what id each pass and band may be looked up. How it stands is never kept: the fold says it. */
+export const issuedPass = sqliteTable(
+  'issued_pass',
   {
     eventId: text('event_id')
       .notNull()
@@ -89,11 +69,8 @@ export const passState = sqliteTable(
       .references(() => club.id),
     subjectKey: text('subject_key').notNull(),
     passId: text('pass_id').notNull(),
-    typedCode: text('typed_code').notNull(),
-    state: text('state', { enum: ['live', 'dead', 'quarantined'] }).notNull(),
-    body: text('body', { mode: 'json' }).$type<Readonly<Record<string, unknown>>>().notNull(),
   },
-  (table) => [primaryKey({ columns: [table.eventId, table.recordHash] }), index('pass_state_subject').on(table.eventId, table.subjectKey)],
+  (table) => [primaryKey({ columns: [table.eventId, table.recordHash] }), index('issued_pass_id').on(table.eventId, table.passId)],
 )
 
 /** What was scanned at the pit exit and what was answered. Append-only by trigger; not part of the log. */

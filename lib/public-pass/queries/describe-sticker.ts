@@ -2,7 +2,7 @@ import 'server-only'
 import { and, eq } from 'drizzle-orm'
 import { verify } from 'node:crypto'
 import type { Db } from '@/db/client'
-import { device, event, passState } from '@/db/schema'
+import { device, event, issuedPass } from '@/db/schema'
 import type { SubjectState } from '@/lib/inspection/state'
 import { passId, type PassPayload } from '@/lib/pass/pass-payload'
 import { readQrText } from '@/lib/pass/qr-text'
@@ -65,9 +65,9 @@ const verifyOnServer: VerifySignature = async (publicKey, message, signature) =>
 
 function reportedPass(database: Db, own: EventRow, payload: PassPayload, readStates: ReadStates, now: number): Reported | null {
   const rows = database
-    .select({ hash: passState.recordHash, subjectKey: passState.subjectKey })
-    .from(passState)
-    .where(and(eq(passState.eventId, own.id), eq(passState.passId, passId(payload))))
+    .select({ hash: issuedPass.recordHash, subjectKey: issuedPass.subjectKey })
+    .from(issuedPass)
+    .where(and(eq(issuedPass.eventId, own.id), eq(issuedPass.passId, passId(payload))))
     .all()
   const states = rows.length === 0 ? null : readStates(database, own.id, now)
   const reported = rows.flatMap(({ hash, subjectKey }) => {

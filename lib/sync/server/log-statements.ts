@@ -32,23 +32,7 @@ export interface LogStatements {
   readonly insert: Statement<[NewRow]>
   readonly notes: Statement<[string, number, number], { readonly hash: string; readonly salt: string; readonly text: string }>
   readonly addNote: Statement<[{ hash: string; clubId: string; eventId: string; salt: string; text: string; seq: number }]>
-  readonly putState: Statement<
-    [{ eventId: string; subjectKey: string; clubId: string; seq: number; day: string; verdict: string; body: string }]
-  >
-  readonly putPass: Statement<
-    [
-      {
-        eventId: string
-        recordHash: string
-        clubId: string
-        subjectKey: string
-        passId: string
-        typedCode: string
-        state: string
-        body: string
-      },
-    ]
-  >
+  readonly addPass: Statement<[{ eventId: string; recordHash: string; clubId: string; subjectKey: string; passId: string }]>
   readonly contact: Statement<[{ at: number; unsent: number | null; deviceId: string }]>
 }
 
@@ -74,15 +58,8 @@ export function logStatements(database: Db): LogStatements {
     addNote: client.prepare(
       `INSERT INTO note (hash, club_id, event_id, salt, text, seq) VALUES (@hash, @clubId, @eventId, @salt, @text, @seq) ON CONFLICT (hash) DO NOTHING`,
     ),
-    putState: client.prepare(
-      `INSERT INTO subject_state (event_id, subject_key, club_id, seq, day, verdict, body)
-       VALUES (@eventId, @subjectKey, @clubId, @seq, @day, @verdict, @body)
-       ON CONFLICT (event_id, subject_key) DO UPDATE SET seq = excluded.seq, day = excluded.day, verdict = excluded.verdict, body = excluded.body`,
-    ),
-    putPass: client.prepare(
-      `INSERT INTO pass_state (event_id, record_hash, club_id, subject_key, pass_id, typed_code, state, body)
-       VALUES (@eventId, @recordHash, @clubId, @subjectKey, @passId, @typedCode, @state, @body)
-       ON CONFLICT (event_id, record_hash) DO UPDATE SET state = excluded.state, body = excluded.body`,
+    addPass: client.prepare(
+      `INSERT INTO issued_pass (event_id, record_hash, club_id, subject_key, pass_id) VALUES (@eventId, @recordHash, @clubId, @subjectKey, @passId)`,
     ),
     contact: client.prepare('UPDATE device SET last_contact_at = @at, unsent = coalesce(@unsent, unsent) WHERE id = @deviceId'),
   }

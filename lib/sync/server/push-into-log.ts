@@ -3,17 +3,17 @@ import type { Db } from '@/db/client'
 import { transaction } from '@/db/transaction'
 import type { SyncPushRequest, SyncPushResponse } from '@/lib/contracts/sync-push'
 import { isKnown } from '@/lib/inspection/record'
-import { subjectKey, type SubjectKey } from '@/lib/inspection/subject'
+import { subjectKey } from '@/lib/inspection/subject'
 import { assert } from '@/lib/platform/assert'
 import { sha256 } from '@/lib/platform/sha256'
 import { chainNext, noteHash } from '../core/chain'
 import { decideDisposition } from '../core/decide-disposition'
 import { dispositionOf } from '../core/held-record'
+import { readToken } from '../core/read-token'
 import { dispositionContext } from './disposition-context'
 import { eventFrame, type EventFrame } from './event-frame'
 import { append, dropEventLog, eventLog, type EventLog } from './event-log'
 import { logStatements, type LogStatements } from './log-statements'
-import { refreshProjections, touchedSubjects } from './projections'
 import type { RefusedRecord, VerifiedRecord } from './verify-records'
 
 type Answer = SyncPushResponse['answers'][number]
@@ -29,14 +29,13 @@ interface Work {
   readonly frame: EventFrame
   readonly log: EventLog
   readonly statements: LogStatements
-  readonly touched: Set<SubjectKey>
   readonly noteSeq: Map<string, number>
   readonly now: number
 }
 
 /**
- * Takes verified records into the event's log in one transaction (rules S1, S2, S3, T1): each gets its number, its disposition and its place in the chain, and
- * the projections of the subjects they touch are folded again. All is committed, synchronously to the disk, before anything is answered.
+ * Takes verified records into the event's log in one transaction (rules S1, S2, S3, T1): each gets its number, its disposition and its place in the chain.
+ * Nothing is folded here: who reads folds. All is committed, synchronously to the disk, before anything is answered.
  */
 export function pushIntoLog(
   database: Db,
@@ -52,11 +51,10 @@ export function pushIntoLog(
       assert(frame !== null, `a push to event ${eventId}, which is not there`)
       const log = eventLog(database, eventId)
       const statements = logStatements(database)
-      const work: Work = { database, frame, log, statements, touched: new Set(), noteSeq: new Map(), now }
+      const work: Work = { database, frame, log, statements, noteSeq: new Map(), now }
       const before = log.seq
       const answers = records.map((record) => (record.state === 'refused' ? refusal(record) : take(work, record)))
       keepNotes(work, notes)
-      refreshProjections(database, frame, log, touchedSubjects(log, work.touched, eventId), now)
       const answered = answers.filter(({ outcome }) => outcome !== 'refused').length
       statements.contact.run({ at: now, unsent: Math.max(0, pusher.unsent - answered), deviceId: pusher.deviceId })
       return { answers, stored: log.seq - before }
@@ -101,7 +99,11 @@ function take(work: Work, verified: VerifiedRecord): Answer {
     receivedAt: now,
   })
   append(log, { hash, record, disposition: dispositionOf(told) }, row)
-  work.touched.add(key)
+  if (isKnown(record) && (record.kind === 'pass' || record.kind === 'band')) {
+    const token = readToken(record.token)
+    if (token !== null)
+      statements.addPass.run({ eventId: frame.event.id, recordHash: hash, clubId: frame.event.clubId, subjectKey: key, passId: token.id })
+  }
   if (isKnown(record) && 'notes' in record) for (const note of record.notes ?? []) work.noteSeq.set(note, row.seq)
   return { id, hash, outcome: code === null ? 'stored' : 'quarantined', code, seq: row.seq }
 }

@@ -1,0 +1,2 @@
+DROP TABLE `pass_state`;--> statement-breakpoint
+DROP TABLE `subject_state`;
