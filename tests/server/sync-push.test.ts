@@ -368,8 +368,12 @@ describe('reading the log', () => {
     expect(inMemory.flatMap(({ passes }) => passes.map(({ state }) => state))).toEqual(['live', 'dead'])
     dropEventLog(paddock.database(), paddock.event)
     expect(paddock.cars.map((car) => onServer(paddock, car))).toEqual(inMemory)
-    expect(paddock.database().select().from(tables.issuedPass).all()).toMatchObject(
-      expect.arrayContaining(paddock.cars.slice(0, 2).map((car) => expect.objectContaining({ subjectKey: `car:${car}` }))),
+    const found = paddock.database().select().from(tables.issuedPass).all()
+    expect(found.map(({ subjectKey }) => subjectKey).sort()).toEqual(
+      paddock.cars
+        .slice(0, 2)
+        .map((car) => `car:${car}`)
+        .sort(),
     )
   })
 
