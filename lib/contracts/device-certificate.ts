@@ -11,13 +11,16 @@ export const deviceCertificate = z.strictObject({
   v: z.literal(1),
   device: z.uuid(),
   event: z.uuid(),
-  kid: z.int().check(z.gte(1), z.lte(255)),
+  /** 0 is the server itself. */
+  kid: z.int().check(z.gte(0), z.lte(255)),
   /** Raw Ed25519 public key, base64url. */
   publicKey: z.string().check(z.regex(/^[A-Za-z0-9_-]{43}$/)),
   deviceName: z.string().check(z.minLength(1), z.maxLength(60)),
   people: z
     .array(z.strictObject({ id: z.uuid(), name: z.string().check(z.minLength(1), z.maxLength(120)), roles: z.array(z.enum(ROLES)) }))
-    .check(z.minLength(1), z.maxLength(20)),
+
+    // A tablet has a handful; the server's own names everybody of the office who ever acted through it.
+    .check(z.minLength(1), z.maxLength(200)),
   /** Server time, ms. */
   issuedAt: z.int(),
 })

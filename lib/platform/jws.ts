@@ -2,8 +2,9 @@ import 'server-only'
 import { createPublicKey, type KeyObject, sign, verify } from 'node:crypto'
 
 /** Signs a payload as a compact JWS (RFC 7515) with Ed25519 (`EdDSA`, RFC 8037). Synchronous, so that it may stand inside a transaction. */
-export function signJws(payload: object, type: string, privateKey: KeyObject): string {
-  const signed = `${encode(JSON.stringify({ alg: 'EdDSA', typ: type }))}.${encode(JSON.stringify(payload))}`
+export function signJws(payload: object, type: string, privateKey: KeyObject, keyId?: string): string {
+  const header = { alg: 'EdDSA', typ: type, ...(keyId === undefined ? {} : { kid: keyId }) }
+  const signed = `${encode(JSON.stringify(header))}.${encode(JSON.stringify(payload))}`
   return `${signed}.${sign(null, Buffer.from(signed), privateKey).toString('base64url')}`
 }
 

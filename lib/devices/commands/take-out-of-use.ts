@@ -1,5 +1,5 @@
 import 'server-only'
-import { and, eq, max, sql } from 'drizzle-orm'
+import { and, eq, gt, max, sql } from 'drizzle-orm'
 import { device, event as eventTable, record } from '@/db/schema'
 import { transaction } from '@/db/transaction'
 import type { InputOf, OutputOf } from '@/lib/contracts/contract'
@@ -27,7 +27,7 @@ export function takeOutOfUse(
     const row = tx
       .select()
       .from(device)
-      .where(and(eq(device.id, body.device), eq(device.eventId, event.id)))
+      .where(and(eq(device.id, body.device), eq(device.eventId, event.id), gt(device.kid, 0)))
       .get()
     if (!row) return refuse('missing')
     if (row.state === body.as) return deviceView(tx, row)

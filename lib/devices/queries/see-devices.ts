@@ -1,5 +1,5 @@
 import 'server-only'
-import { asc, eq } from 'drizzle-orm'
+import { and, asc, eq, gt } from 'drizzle-orm'
 import type { Db } from '@/db/client'
 import { device } from '@/db/schema'
 import type { InputOf, OutputOf } from '@/lib/contracts/contract'
@@ -10,7 +10,7 @@ import { ownEvent } from '@/lib/platform/own-event'
 import { type Refusal, refuse } from '@/lib/platform/refusal'
 import { peopleOf } from './people-of'
 
-/** Every device ever enrolled for the event, by its number. */
+/** Every device ever enrolled for the event, by its number. The server's own, number 0, is nobody's to take out of use and is not among them. */
 export function seeDevices(
   { params }: InputOf<typeof listDevices>,
   actor: AccountActor,
@@ -18,7 +18,12 @@ export function seeDevices(
 ): OutputOf<typeof listDevices> | Refusal {
   const event = ownEvent(database, actor, params.event)
   if (!event) return refuse('missing')
-  const rows = database.select().from(device).where(eq(device.eventId, event.id)).orderBy(asc(device.kid)).all()
+  const rows = database
+    .select()
+    .from(device)
+    .where(and(eq(device.eventId, event.id), gt(device.kid, 0)))
+    .orderBy(asc(device.kid))
+    .all()
   return { devices: rows.map((row) => deviceView(database, row)) }
 }
 

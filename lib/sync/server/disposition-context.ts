@@ -48,7 +48,8 @@ export function dispositionContext(
   }
 }
 
-function shownOf(frame: EventFrame, log: EventLog, { subject }: AnyRecord): DispositionContext['shown'] {
+/** Number and plate tail of the subject's car as the records so far leave them; null where it has none. */
+export function shownOf(frame: EventFrame, log: EventLog, { subject }: Pick<AnyRecord, 'subject'>): DispositionContext['shown'] {
   const id = 'car' in subject ? subject.car : 'fit' in subject ? subject.fit : null
   const entry = id === null ? undefined : frame.entries.get(id)
   if (id === null || entry === undefined) return null

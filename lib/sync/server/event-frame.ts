@@ -28,13 +28,18 @@ export function eventFrame(database: Db, eventId: string): EventFrame | null {
   holder.lockwireFrames.set(database.$client, frames)
   const known = frames.get(eventId)
   if (known?.event.snapshotVersion === version.snapshotVersion) return known
+  const frame = readFrame(database, eventId)
+  if (frame !== null) frames.set(eventId, frame)
+  return frame
+}
+
+/** The frame as the rows are at this moment, not kept: inside a transaction that changes them, which may yet be rolled back. */
+export function readFrame(database: Db, eventId: string): EventFrame | null {
   const row = database.select().from(event).where(eq(event.id, eventId)).get()
   if (row === undefined) return null
   const rows = database.select().from(entry).where(eq(entry.eventId, eventId)).all()
   const entries = new Map(rows.map(({ id, number, plate, groupId }) => [id, { number, plateTail: plateTail(plate), group: groupId }]))
-  const frame: EventFrame = { event: row, entries, declared: declaredOf(database, eventId) }
-  frames.set(eventId, frame)
-  return frame
+  return { event: row, entries, declared: declaredOf(database, eventId) }
 }
 
 function declaredOf(database: Db, eventId: string): ReadonlySet<SubjectKey> {
