@@ -117,6 +117,25 @@ export const declaration = sqliteTable(
   (table) => [uniqueIndex('declaration_version').on(table.entryId, table.version)],
 )
 
+/** A declaration that is being written: one an entry and account, gone when it is signed. The signed ones are immutable and stand above. */
+export const declarationDraft = sqliteTable(
+  'declaration_draft',
+  {
+    entryId: text('entry_id')
+      .notNull()
+      .references(() => entry.id),
+    accountId: text('account_id')
+      .notNull()
+      .references(() => account.id),
+    clubId: text('club_id')
+      .notNull()
+      .references(() => club.id),
+    body: text('body', { mode: 'json' }).$type<Readonly<Record<string, unknown>>>().notNull(),
+    updatedAt: integer('updated_at').notNull(),
+  },
+  (table) => [primaryKey({ columns: [table.entryId, table.accountId] })],
+)
+
 /** A link that lets the person of an entry in without a password. Only the SHA-256 of its token is kept. */
 export const entryLink = sqliteTable(
   'entry_link',
