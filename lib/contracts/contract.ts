@@ -16,6 +16,8 @@ export interface Rate {
 
 export const NOTHING = z.strictObject({})
 type Nothing = typeof NOTHING
+/** The response of a download: bytes, with no shape of ours. */
+export const FILE = z.unknown()
 type Shape = z.ZodMiniType
 
 /** One endpoint, written once for server and client: where it is, who may, how much, and what crosses. */

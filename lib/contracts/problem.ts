@@ -32,6 +32,10 @@ export const PROBLEM_CODES = [
   'device-decided',
   'import-refused',
   'import-stale',
+  'photo-not-one',
+  'photo-unreadable',
+  'photo-too-many-pixels',
+  'photo-other-hash',
   'no-network',
   'not-our-server',
 ] as const

@@ -6,6 +6,7 @@ import { entryImport } from './entry-import'
 import { join, joinState, makeJoinCode, seeJoinCode } from './join'
 import { live } from './live'
 import { me } from './me'
+import { getPhoto, putPhoto } from './photos'
 import { signIn } from './sign-in'
 import { signOut } from './sign-out'
 import { syncPull } from './sync-pull'
@@ -30,4 +31,6 @@ export const CONTRACTS: readonly Contract[] = [
   live,
   board,
   entryImport,
+  putPhoto,
+  getPhoto,
 ]

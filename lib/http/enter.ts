@@ -20,15 +20,22 @@ export interface RouteContext {
 
 export interface Entered<C extends Contract> {
   readonly input: InputOf<C>
+  /** What was sent, as it came: what an upload is made of. */
+  readonly bytes: Uint8Array
   readonly actor: Actor
   readonly deps: Deps
 }
 
 /**
  * The one door, in this order: size → origin → actor → may they → rate → strict parse. Whether they may is asked before anything is
- * looked up, so that an answer never tells somebody without the right what exists.
+ * looked up, so that an answer never tells somebody without the right what exists. The bytes of an `upload` are nobody's JSON and are not parsed.
  */
-export async function enter<C extends Contract>(contract: C, request: Request, context: RouteContext): Promise<Entered<C> | Refusal> {
+export async function enter<C extends Contract>(
+  contract: C,
+  request: Request,
+  context: RouteContext,
+  sent: 'json' | 'upload' = 'json',
+): Promise<Entered<C> | Refusal> {
   const [database, instant, { origin }] = [servedDatabase(), now(), env()]
   const bytes = await readBody(request, contract.limitBytes)
   if (isRefusal(bytes)) return bytes
@@ -42,7 +49,7 @@ export async function enter<C extends Contract>(contract: C, request: Request, c
   if (!isAllowed(database, contract, actor, eventId)) return refuse('forbidden')
   const limited = await takeFromAllowance(request, contract, actor)
   if (limited) return limited
-  const input = parseInput(contract, request, params, bytes)
+  const input = parseInput(contract, request, params, sent === 'json' ? bytes : new Uint8Array())
   if (isRefusal(input)) return input
   const deps: Deps = {
     database,
@@ -53,5 +60,5 @@ export async function enter<C extends Contract>(contract: C, request: Request, c
     replyHeaders: new Headers(),
     signal: request.signal,
   }
-  return { input, actor, deps }
+  return { input, bytes, actor, deps }
 }

@@ -163,6 +163,30 @@ export const ERRORS: Readonly<Record<ProblemCode, ErrorWords>> = {
     kept: 'Nothing was imported.',
     todo: 'Look it through again and then import.',
   },
+  'photo-not-one': {
+    status: 415,
+    what: 'What was sent is no photograph that Lockwire keeps.',
+    kept: 'It was not kept.',
+    todo: 'Send a JPEG, PNG or WebP, as a phone’s camera makes them.',
+  },
+  'photo-unreadable': {
+    status: 422,
+    what: 'The photograph is damaged or not whole.',
+    kept: 'It was not kept.',
+    todo: 'Take it again, or choose another.',
+  },
+  'photo-too-many-pixels': {
+    status: 422,
+    what: 'The photograph has more than 50 million pixels.',
+    kept: 'It was not kept.',
+    todo: 'Send a smaller one.',
+  },
+  'photo-other-hash': {
+    status: 422,
+    what: 'What arrived is not what was sent: it was changed on the way.',
+    kept: 'It was not kept.',
+    todo: 'Send it again.',
+  },
   'no-network': { status: 0, what: 'The server could not be reached.', kept: DEVICE_KEEPS, todo: 'Try again when there is signal.' },
   'not-our-server': {
     status: 0,

@@ -22,6 +22,9 @@ export const POLICY = {
   'device:enrol': ['chief', 'scrutineer', 'helper', 'sign-on', 'marshal', 'organiser'],
   'device:retire': ['admin', 'organiser'],
   'day:load': ['chief', 'scrutineer', 'helper', 'sign-on', 'marshal', 'organiser'],
+  'photo:put': ['admin', 'organiser', 'chief', 'scrutineer', 'helper', 'sign-on', 'marshal', 'entrant'],
+  /** Another's photograph at an event; one's own is always seen. */
+  'photo:see': ['admin', 'organiser', 'chief', 'scrutineer', 'helper', 'sign-on', 'marshal'],
   'record:presented': ['chief', 'scrutineer', 'helper', 'sign-on', 'marshal'],
   /** A `presented` that asks less than the ones before it (rule F12). */
   'record:presented-lowering': ['chief', 'scrutineer'],

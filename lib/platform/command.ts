@@ -44,4 +44,30 @@ export type StreamCommand<C extends Contract> = (
   deps: Deps,
 ) => AsyncIterable<OutputOf<C>> | Refusal | Promise<AsyncIterable<OutputOf<C>> | Refusal>
 
+/** An upload: the bytes as they came, within the contract's limit and otherwise unlooked at. */
+export type UploadCommand<C extends Contract> = (
+  input: InputOf<C>,
+  bytes: Uint8Array,
+  actor: ActorFor<C['auth']>,
+  deps: Deps,
+) => OutputOf<C> | Refusal | Promise<OutputOf<C> | Refusal>
+
+/** A file to be sent as it is. */
+export interface FileAnswer {
+  readonly bytes: Uint8Array
+  /** Its media type, such as `image/jpeg`; what a browser guesses from the bytes does not count. */
+  readonly type: string
+  /** Offered under this name to be saved; null: to be shown where it was asked for. */
+  readonly saveAs: string | null
+  /** Names these very bytes for ever, so that the asker's own browser may keep them a day; null: asked anew each time. */
+  readonly etag: string | null
+}
+
+/** A download: one file. */
+export type DownloadCommand<C extends Contract> = (
+  input: InputOf<C>,
+  actor: ActorFor<C['auth']>,
+  deps: Deps,
+) => FileAnswer | Refusal | Promise<FileAnswer | Refusal>
+
 export type { Actor, AccountActor, DeviceActor, Nobody }

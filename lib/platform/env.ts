@@ -5,6 +5,8 @@ export interface Env {
   /** The only origin that pages are served from and unsafe requests may come from; stickers open it. Configured, never derived from a request. */
   readonly origin: string
   readonly databaseFile: string
+  /** Where photographs are kept: a folder beside the database unless another is named. */
+  readonly photoFolder: string
   readonly production: boolean
   readonly logLevel: 'fatal' | 'error' | 'warn' | 'info' | 'debug' | 'silent'
 }
@@ -14,6 +16,7 @@ const schema = z.object({
   PORT: z.optional(port),
   LOCKWIRE_ORIGIN: z.optional(z.url('LOCKWIRE_ORIGIN must be a full address such as https://bay.example.org')),
   LOCKWIRE_DB: z.optional(z.string().check(z.minLength(1, 'LOCKWIRE_DB must name a file'))),
+  LOCKWIRE_PHOTOS: z.optional(z.string().check(z.minLength(1, 'LOCKWIRE_PHOTOS must name a folder'))),
   LOCKWIRE_LOG: z.optional(z.enum(['fatal', 'error', 'warn', 'info', 'debug', 'silent'])),
   NODE_ENV: z.optional(z.string()),
 })
@@ -32,16 +35,18 @@ export function readEnv(variables: Readonly<Record<string, string | undefined>>)
   if (!result.success) {
     throw new Error(`Lockwire cannot start: ${result.error.issues.map((issue) => `${issue.path.join('.')}: ${issue.message}`).join('; ')}`)
   }
-  const { PORT, LOCKWIRE_ORIGIN, LOCKWIRE_DB, LOCKWIRE_LOG, NODE_ENV } = result.data
+  const { PORT, LOCKWIRE_ORIGIN, LOCKWIRE_DB, LOCKWIRE_PHOTOS, LOCKWIRE_LOG, NODE_ENV } = result.data
   const origin = new URL(LOCKWIRE_ORIGIN ?? `http://localhost:${PORT ?? '3000'}`)
   if (!isTrustworthy(origin)) {
     throw new Error(
       `Lockwire cannot start: LOCKWIRE_ORIGIN is ${origin.origin}. Without https nobody could sign in or record there; give an https address, or http://localhost for trying out.`,
     )
   }
+  const databaseFile = LOCKWIRE_DB ?? './data/lockwire.db'
   return {
     origin: origin.origin,
-    databaseFile: LOCKWIRE_DB ?? './data/lockwire.db',
+    databaseFile,
+    photoFolder: LOCKWIRE_PHOTOS ?? `${databaseFile}-photos`,
     production: NODE_ENV === 'production',
     logLevel: LOCKWIRE_LOG ?? (NODE_ENV === 'test' ? 'silent' : 'info'),
   }

@@ -15,6 +15,8 @@ const MATRIX: Readonly<Record<Action, string>> = {
   'device:enrol': '         no    yes       yes   yes        yes    yes     yes     no',
   'device:retire': '        yes   yes       no    no         no     no      no      no',
   'day:load': '             no    yes       yes   yes        yes    yes     yes     no',
+  'photo:put': '            yes   yes       yes   yes        yes    yes     yes     yes',
+  'photo:see': '            yes   yes       yes   yes        yes    yes     yes     no',
   'record:presented': '     no    no        yes   yes        yes    yes     yes     no',
   'record:presented-lowering': 'no no       yes   yes        no     no      no      no',
   'record:finding-permits': 'no   no        yes   yes        no     yes     no      no',

@@ -2,7 +2,13 @@ import { expect, test } from 'vitest'
 import { readEnv } from '@/lib/platform/env'
 
 test('with nothing said it serves localhost from ./data', () => {
-  expect(readEnv({})).toEqual({ origin: 'http://localhost:3000', databaseFile: './data/lockwire.db', production: false, logLevel: 'info' })
+  expect(readEnv({})).toEqual({
+    origin: 'http://localhost:3000',
+    databaseFile: './data/lockwire.db',
+    photoFolder: './data/lockwire.db-photos',
+    production: false,
+    logLevel: 'info',
+  })
   expect(readEnv({ PORT: '4100' }).origin).toBe('http://localhost:4100')
 })
 

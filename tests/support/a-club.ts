@@ -80,7 +80,7 @@ interface Claims {
   readonly method: string
   readonly path: string
   readonly nowMs: number
-  readonly body?: string
+  readonly body?: string | Uint8Array
   readonly lifeSeconds?: number
 }
 
