@@ -44,9 +44,10 @@ test.each([
 ] as const)('a photograph held at EXIF orientation %i is kept upright', async (orientation, width, height, redAt) => {
   const made = await encoded(await phonePhoto({ orientation }))
   const places = { left: [0.1, 0.5], right: [0.9, 0.5], top: [0.5, 0.1], bottom: [0.5, 0.9] } as const
+  const [x, y] = places[redAt]
 
   expect([made.width, made.height]).toEqual([width, height])
-  expect(await colourAt(made.jpeg, ...places[redAt])).toBe('red')
+  expect(await colourAt(made.jpeg, x, y)).toBe('red')
 })
 
 test.each([
