@@ -1,7 +1,8 @@
 import type { Book } from '@/lib/checklist/book'
 import type { CarFacts } from '@/lib/checklist/car-facts'
+import { holdRow, holdWords, resolveHold } from '@/lib/checklist/resolve-hold'
 import type { Block, KillReason, PassState, SubjectState, Verdict } from '@/lib/inspection/state'
-import { subjectKey, type SubjectKey } from '@/lib/inspection/subject'
+import { kindOfKey, subjectKey, type SubjectKey } from '@/lib/inspection/subject'
 import { listPerson } from './list-person'
 import { CHIEF_ONLY, type ListedBlock, type ListedEntry, type ListedKey, type ListedPass, type PassList } from './pass-list'
 import { passId } from './pass-payload'
@@ -79,20 +80,36 @@ export function blocksOf(state: SubjectState, book: Book | null): readonly Liste
     const head = state.checks.get(check)?.heads.find(({ outcome }) => outcome === 'fail')
     return { kind: 'fail', words: failWords(check, head?.record, book), seeAgain: [], at: head?.record.at ?? null, stickerRemoved: null }
   })
-  return [...state.blocks.map((block) => listBlock(block, book)), ...fails].sort((a, b) => (b.at ?? 0) - (a.at ?? 0))
+  return [...state.blocks.map((block) => listBlock(block, state, book)), ...fails].sort((a, b) => (b.at ?? 0) - (a.at ?? 0))
 }
 
-function listBlock(block: Block, book: Book | null): ListedBlock {
+function listBlock(block: Block, state: SubjectState, book: Book | null): ListedBlock {
   const words = blockWords(block, book)
   const stations = new Set([...block.stations, ...block.checksLeft.flatMap((check) => book?.byId.get(check)?.station ?? [])])
-  const seeAgain = block.onlyChiefLifts ? [CHIEF_ONLY] : [...stations].map((id) => book?.stations.get(id)?.title ?? id)
+  const named = block.onlyChiefLifts ? [CHIEF_ONLY] : [...stations].map((id) => book?.stations.get(id)?.title ?? id)
+  const byEye = block.onlyChiefLifts ? [] : alsoLookFor(block, state, book)
+  const seeAgain = byEye.length === 0 ? named : [...named, `by eye: ${byEye.join(', ')}`]
   return { kind: block.kind, words, seeAgain, at: block.at, stickerRemoved: block.stickerRemoved }
 }
 
-function blockWords({ kind, reason }: Block, book: Book | null): string {
+/** What the reason of a hold asks to be looked at and this checklist has nothing for; empty for whatever is no hold. */
+export function alsoLookFor({ kind, reason }: Pick<Block, 'kind' | 'reason'>, state: SubjectState, book: Book | null): readonly string[] {
+  const row = kind === 'hold' ? holdRow(reason, book) : null
+  const part = kindOfKey(state.key)
+  if (row === null || part === 'event') return []
+  return resolveHold(
+    row,
+    part,
+    book,
+    state.presentedHeads.map(({ record }) => record.facts),
+  ).alsoLook
+}
+
+/** What a block is, in words. */
+export function blockWords({ kind, reason }: Pick<Block, 'kind' | 'reason'>, book: Book | null): string {
   if (kind === 'recall') return RECALL_WORDS[reason] ?? 'recall due'
   if (kind === 'unknown') return `stopped by a newer version of Lockwire (${reason})`
-  return book?.checklist.holdReasons.find(({ id }) => id === reason)?.text ?? reason.replace(/-/g, ' ')
+  return holdWords(reason, book)
 }
 
 /** A due recall by its trigger. */

@@ -51,7 +51,7 @@ test('something that no reason fits can be said too, and then only the chief lif
 
   await pit.press('Something else')
 
-  expect(await screen.findByText(/something else.*only the chief lifts it/)).toBeInTheDocument()
+  expect(await screen.findByText(/Something else, .*only the chief lifts it/)).toBeInTheDocument()
 })
 
 test('a number that no entry has cannot be held', async () => {

@@ -1,6 +1,7 @@
 'use client'
 
 import { useState } from 'react'
+import { Button } from '@/app/_ui/button'
 import { Notice } from '@/app/_ui/notice'
 import { Tabs } from '@/app/_ui/tabs'
 import { lookUpByNumber } from '@/lib/pass/look-up'
@@ -14,10 +15,12 @@ interface AskScreenProps {
   readonly list: PassList | null
   readonly asking: Asking
   readonly onHold: (entry: string) => void
+  /** Holds a car whose number nobody read. */
+  readonly onFind: () => void
 }
 
 /** Three ways to ask, on one screen: the camera, the number, the code under the sticker. */
-export function AskScreen({ list, asking, onHold }: AskScreenProps) {
+export function AskScreen({ list, asking, onHold, onFind }: AskScreenProps) {
   const [pad, setPad] = useState<'number' | 'code'>('number')
   const [number, setNumber] = useState('')
   const found = list === null ? [] : lookUpByNumber(list, number)
@@ -66,6 +69,9 @@ export function AskScreen({ list, asking, onHold }: AskScreenProps) {
             <CodePad onAsk={asking.askCode} />
           )}
         </Tabs>
+        <Button look="quiet" className="w-full" onClick={onFind}>
+          Hold a car by its plate or looks
+        </Button>
       </div>
     </div>
   )

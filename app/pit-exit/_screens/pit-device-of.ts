@@ -7,13 +7,17 @@ import type { PitMemory } from './pit-memory'
 /** The organiser's limit while the event itself has not been loaded, min. */
 const STALE_MINUTES = 30
 
-/** What this device knows besides the list, from its clock, the event and what the marshal told it. `clock` is the device's own, ms. */
+/**
+ * What this device knows besides the list, from its clock, the event and what the marshal told it. `clock` is the device's own, ms; `recalls` are those its
+ * clock alone makes due.
+ */
 export function pitDeviceOf(
   clock: number,
   status: DayStatus,
   snapshot: DaySnapshot | null,
   list: PassList | null,
   memory: PitMemory,
+  recalls: readonly PitBlock[] = [],
 ): PitDevice {
   const agreed = memory.readBacks.filter(({ agrees }) => agrees).map(({ at }) => at)
   return {
@@ -24,7 +28,7 @@ export function pitDeviceOf(
     listStaleMinutes: snapshot?.event.listStaleMinutes ?? STALE_MINUTES,
     readBackAt: agreed.length > 0 ? Math.max(...agreed) : null,
     runningGroup: memory.runningGroup,
-    blocks: heardBlocks(memory, list),
+    blocks: [...recalls, ...heardBlocks(memory, list)],
   }
 }
 

@@ -2,7 +2,10 @@
 
 import { useState } from 'react'
 import { useDay } from '@/app/_crew/day-context'
+import { HoldSheet } from '@/app/_crew/hold-sheet'
+import { recallsHere } from '@/app/_crew/recalls-here'
 import { useMinute } from '@/app/_crew/use-minute'
+import { blockByClock } from '@/lib/pass/recalls-by-clock'
 import { decideAboard } from '@/lib/pass/decide-aboard'
 import { decideAtPitExit } from '@/lib/pass/decide-at-pit-exit'
 import type { PassList } from '@/lib/pass/pass-list'
@@ -11,7 +14,7 @@ import { useDayStatus, usePassList } from '@/lib/sync/client/use-day'
 import { AnswerView } from './answer-view'
 import { AskScreen } from './ask-screen'
 import { HeldNumbers } from './held-numbers'
-import { HoldSheet } from './hold-sheet'
+import { FindSheet } from './find-sheet'
 import { ListSheet } from './list-sheet'
 import { pitDeviceOf } from './pit-device-of'
 import { PitStrip } from './pit-strip'
@@ -19,7 +22,7 @@ import { RunningSheet } from './running-sheet'
 import { useAsking, type Asked } from './use-asking'
 import { usePitMemory } from './use-pit-memory'
 
-type Open = { readonly what: 'running' | 'list' } | { readonly what: 'hold'; readonly entry: string } | null
+type Open = { readonly what: 'running' | 'list' | 'find' } | { readonly what: 'hold'; readonly entry: string } | null
 
 /** The pit exit: camera, number and code; the answer over all of it; the hold list always below. */
 export function PitExitScreen() {
@@ -31,7 +34,9 @@ export function PitExitScreen() {
   const asking = useAsking(list)
   const [open, setOpen] = useState<Open>(null)
   if (clock === null) return null
-  const device = pitDeviceOf(clock, status, day.snapshot(), list, pit.memory)
+  const snapshot = day.snapshot()
+  const due = snapshot === null ? [] : recallsHere(day, clock).map((recall) => blockByClock(recall, snapshot))
+  const device = pitDeviceOf(clock, status, snapshot, list, pit.memory, due)
   const { asked } = asking
   const held = <HeldNumbers list={list} device={device} onAsk={asking.askNumber} />
   const strip = (
@@ -49,12 +54,13 @@ export function PitExitScreen() {
       {/* Under an answer nothing of it can be pressed or heard; the camera stays on, so that the next car need not wait for it. */}
       <div inert={asked !== null} className="flex grow flex-col">
         {strip}
-        <AskScreen list={list} asking={asking} onHold={hold} />
+        <AskScreen list={list} asking={asking} onHold={hold} onFind={() => setOpen({ what: 'find' })} />
         <div className="sticky bottom-0 border-t-[3px] bg-ground">{held}</div>
       </div>
       {asked && <AnswerView answer={answerTo(asked, list, device)} asked={asked} asking={asking} strip={strip} held={held} onHold={hold} />}
       <RunningSheet isOpen={open?.what === 'running'} pit={pit} onClose={() => setOpen(null)} />
       <ListSheet isOpen={open?.what === 'list'} list={list} device={device} onHeard={pit.hear} onClose={() => setOpen(null)} />
+      {open?.what === 'find' && <FindSheet onPick={hold} onClose={() => setOpen(null)} />}
       {open?.what === 'hold' && (
         <HoldSheet
           entry={open.entry}

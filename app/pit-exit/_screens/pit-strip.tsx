@@ -2,6 +2,7 @@
 
 import { ago } from '@/app/_crew/say-when'
 import { useDay } from '@/app/_crew/day-context'
+import { daySwitches } from '@/app/_crew/day-switches'
 import { classNames } from '@/app/_ui/class-names'
 import { ANY_GROUP } from '@/lib/pass/pit-device'
 import type { PassList } from '@/lib/pass/pass-list'
@@ -23,6 +24,7 @@ export function PitStrip({ list, device, isForgetful, onList, onRunning }: PitSt
   const isOld = list !== null && isStale(list, device)
   const group = day.snapshot()?.groups.find(({ id }) => id === device.runningGroup)
   const running = device.runningGroup === ANY_GROUP ? 'open to all groups' : group ? `${group.name} running` : 'Which group is running?'
+  const { isWet } = daySwitches(day, device.now)
   return (
     <div className="border-b">
       <div className="flex items-stretch justify-between">
@@ -30,6 +32,7 @@ export function PitStrip({ list, device, isForgetful, onList, onRunning }: PitSt
           {list === null ? 'no list' : `list ${list.version} · ${age(listAge(list, device))}`}
         </button>
         <button type="button" onClick={onRunning} className="target px-4 text-right font-bold text-accent underline underline-offset-4">
+          {isWet && 'WET · '}
           {running}
         </button>
       </div>

@@ -1,6 +1,7 @@
 'use client'
 
 import { useDay } from '@/app/_crew/day-context'
+import { DaySwitchesPanel } from '@/app/_crew/day-switches-panel'
 import { Button } from '@/app/_ui/button'
 import { Sheet } from '@/app/_ui/sheet'
 import { ANY_GROUP } from '@/lib/pass/pit-device'
@@ -12,7 +13,7 @@ interface RunningSheetProps {
   readonly onClose: () => void
 }
 
-/** Which group is on track now, as the marshal says it; kept on this device. A car of another group is CHECK. */
+/** Which group is on track now, kept on this device: a car of another group is CHECK. Beside it what is said for the whole event. */
 export function RunningSheet({ isOpen, pit, onClose }: RunningSheetProps) {
   const day = useDay()
   const groups = [...(day.snapshot()?.groups ?? [])].sort((a, b) => a.order - b.order)
@@ -34,6 +35,8 @@ export function RunningSheet({ isOpen, pit, onClose }: RunningSheetProps) {
             {name}
           </Button>
         ))}
+        <h3 className="mt-4 text-xl">The whole event</h3>
+        <DaySwitchesPanel />
       </div>
     </Sheet>
   )
