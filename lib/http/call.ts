@@ -12,16 +12,36 @@ export interface CallOptions {
 }
 
 /** Asks the server by a contract, with the sign-in's cookie. Never throws but for an abort: no network and foreign answers are problems too. */
-export async function call<C extends Contract>(contract: C, input: CallInput<C>, options: CallOptions = {}): Promise<Called<AnswerOf<C>>> {
-  const { params, query, body } = input as { params?: object; query?: object; body?: object }
+export function call<C extends Contract>(contract: C, input: CallInput<C>, options: CallOptions = {}): Promise<Called<AnswerOf<C>>> {
+  const { body } = input as { body?: object }
+  return ask(contract, input, body === undefined ? null : { type: 'application/json', data: JSON.stringify(body) }, options)
+}
+
+/** As `call`, for a contract that takes bytes which are no JSON. */
+export function upload<C extends Contract>(
+  contract: C,
+  input: CallInput<C>,
+  bytes: Blob,
+  options: CallOptions = {},
+): Promise<Called<AnswerOf<C>>> {
+  return ask(contract, input, { type: bytes.type, data: bytes }, options)
+}
+
+async function ask<C extends Contract>(
+  contract: C,
+  input: CallInput<C>,
+  body: { readonly type: string; readonly data: string | Blob } | null,
+  options: CallOptions,
+): Promise<Called<AnswerOf<C>>> {
+  const { params, query } = input as { params?: object; query?: object }
   let response: Response
   try {
     response = await fetch(urlOf(contract, params ?? {}, query ?? {}), {
       method: contract.method,
       credentials: 'same-origin',
       cache: 'no-store',
-      headers: { accept: 'application/json', ...(body ? { 'content-type': 'application/json' } : {}), ...options.headers },
-      ...(body ? { body: JSON.stringify(body) } : {}),
+      headers: { accept: 'application/json', ...(body ? { 'content-type': body.type } : {}), ...options.headers },
+      ...(body ? { body: body.data } : {}),
       ...(options.signal ? { signal: options.signal } : {}),
     })
   } catch (error) {
