@@ -7,7 +7,7 @@ import { goTo, useLocation } from '@/app/_crew/use-location'
 import { Button } from '@/app/_ui/button'
 import { Notice } from '@/app/_ui/notice'
 import { useDayEntries } from '@/lib/sync/client/use-day'
-import { CarScreen, fetchCarScreen } from './car-screen-when-needed'
+import { CarScreen, fetchCarScreenWhenIdle } from './car-screen-when-needed'
 import { FindCar } from './find-car'
 
 /** The bay's screens, behind the gate of every crew device. */
@@ -23,7 +23,7 @@ export function BayApp() {
 export function BayScreens() {
   // Drawn again when an entry changes: a record says what number its screen showed (rule T1), so the screen may never lag behind.
   const entries = useDayEntries(useDay())
-  useEffect(fetchCarScreen, [])
+  useEffect(fetchCarScreenWhenIdle, [])
   const [, , what, id, ...rest] = (useLocation() ?? '/bay').split('/')
   if (what === undefined || what === '') return <FindCar />
   const entry = what === 'car' ? entries.find((one) => one.id === id) : undefined

@@ -7,8 +7,15 @@ const load = () => import('./car-screen')
 
 export const CarScreen = lazy(() => load().then((module) => ({ default: module.CarScreen })))
 
-/** Fetches the walk while nobody waits, so that the first tap on a car finds it here. */
-export function fetchCarScreen(): void {
+/** Fetches the walk once the browser has nothing better to do, so that the first tap on a car finds it here. Gives what calls it off. */
+export function fetchCarScreenWhenIdle(): () => void {
   // A failure is no news: the worker keeps it as well, and the tap asks again.
-  load().catch(() => undefined)
+  const fetchIt = () => void load().catch(() => undefined)
+  // Safari has no idle callback.
+  if (!('requestIdleCallback' in window)) {
+    const timer = setTimeout(fetchIt, 1000)
+    return () => clearTimeout(timer)
+  }
+  const idle = requestIdleCallback(fetchIt, { timeout: 3000 })
+  return () => cancelIdleCallback(idle)
 }
