@@ -1,9 +1,11 @@
 'use client'
 
 import { isStale } from '@/lib/pass/list-age'
-import type { PassList } from '@/lib/pass/pass-list'
+import type { ListedBlock, PassList } from '@/lib/pass/pass-list'
 import type { PitDevice } from '@/lib/pass/pit-device'
 import { readBackOf } from '@/lib/pass/read-back'
+
+const STOPPED: ReadonlySet<ListedBlock['kind']> = new Set(['hold', 'recall', 'unknown'])
 
 interface HeldNumbersProps {
   readonly list: PassList | null
@@ -11,7 +13,7 @@ interface HeldNumbersProps {
   readonly onAsk: (number: string) => void
 }
 
-/** The hold list: every number that may not run although it has had a pass, in huge digits; a press says why. */
+/** The hold list: every number that is held, and every one that may not run although it has had a pass, in huge digits; a press says why. */
 export function HeldNumbers({ list, device, onAsk }: HeldNumbersProps) {
   const numbers = heldNumbers(list, device)
   const isOld = list === null || isStale(list, device)
@@ -41,6 +43,8 @@ export function heldNumbers(list: PassList | null, { blocks }: Pick<PitDevice, '
     if ('number' in about) return [about.number]
     return 'entry' in about ? (list?.entries.filter(({ entry }) => entry === about.entry).map(({ number }) => number) ?? []) : []
   })
-  const all = new Set([...(list === null ? [] : readBackOf(list).numbers), ...here])
+  // A car that is held before it ever had a pass stands here as well: who held it looks for it.
+  const held = list?.entries.filter(({ blocks: of }) => of.some(({ kind }) => STOPPED.has(kind))).map(({ number }) => number) ?? []
+  const all = new Set([...(list === null ? [] : readBackOf(list).numbers), ...held, ...here])
   return [...all].sort((a, b) => a.localeCompare(b, 'en', { numeric: true }))
 }
