@@ -16,8 +16,10 @@ function linkWords({ link, lastPullAt }: DayStatus, at: (time: number) => string
   return link === 'live' ? 'in step' : `last heard ${at(lastPullAt)}`
 }
 
-function unsentWords({ unsent, unsentSince, link, lastPullAt }: DayStatus, at: (time: number) => string): string {
-  if (unsent === 0) return 'all sent'
+function unsentWords({ unsent, unsentSince, photosUnsent, link, lastPullAt }: DayStatus, at: (time: number) => string): string {
+  const photos = photosUnsent === 0 ? '' : `${photosUnsent} ${photosUnsent === 1 ? 'photograph' : 'photographs'}`
+  if (unsent === 0) return photos === '' ? 'all sent' : `${photos} to send`
+  const what = photos === '' ? `${unsent} to send` : `${unsent} and ${photos} to send`
   const isSaid = link === 'offline' && lastPullAt !== null && unsentSince !== null && unsentSince >= lastPullAt
-  return unsentSince === null || isSaid ? `${unsent} to send` : `${unsent} to send since ${at(unsentSince)}`
+  return unsentSince === null || isSaid ? what : `${what} since ${at(unsentSince)}`
 }

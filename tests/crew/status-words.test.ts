@@ -13,6 +13,7 @@ function aStatus(given: Partial<DayStatus> = {}): DayStatus {
     unlocked: null,
     unsent: 0,
     unsentSince: null,
+    photosUnsent: 0,
     needsAttention: 0,
     lastPullAt: at(7, 12),
     lastPushAt: null,
@@ -35,6 +36,12 @@ test.each([
   ['something is stuck longer', { link: 'offline', unsent: 14, unsentSince: at(7, 5) }, 'offline since 07:12 · 14 to send since 07:05'],
   ['a line, and yet not sent', { unsent: 2, unsentSince: at(7, 20) }, 'in step · 2 to send since 07:20'],
   ['never heard, and no network', { link: 'offline', lastPullAt: null }, 'offline · all sent'],
+  ['the records are through, two photographs are not', { photosUnsent: 2 }, 'in step · 2 photographs to send'],
+  [
+    'records and a photograph wait',
+    { link: 'offline', unsent: 14, unsentSince: at(7, 5), photosUnsent: 1 },
+    'offline since 07:12 · 14 and 1 photograph to send since 07:05',
+  ],
   ['not asked yet', { link: 'polling', lastPullAt: null }, 'not heard from the server yet · all sent'],
 ] as const)('the strip says what waits to be sent and since when: %s', (_, given, words) => {
   expect(statusWords(aStatus(given), 'UTC')).toBe(words)

@@ -53,8 +53,8 @@ export async function waitForOfflineShells(page: Page): Promise<void> {
 /** What the device's own strip says that waits to be sent; 0 for “all sent”. */
 export async function unsentOnStrip(page: Page): Promise<number> {
   const words = await page.locator('[data-slot=strip]').innerText()
-  const found = /(\d+) to send/.exec(words)
+  const found = /(\d+)(?: and \d+ photographs?)? to send/.exec(words)
   if (found) return Number(found[1])
-  if (words.includes('all sent')) return 0
+  if (/all sent|photographs? to send/.test(words)) return 0
   throw new Error(`the strip does not say what waits to be sent: ${words}`)
 }

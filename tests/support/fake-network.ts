@@ -18,6 +18,10 @@ export interface FakeNetwork {
   readonly next: (Fault | 'pass')[]
   /** Asked where nothing is queued. */
   weather: () => Fault | 'pass'
+  /** Photographs the server has, by hash; taken away here, the server forgot them. */
+  readonly photos: Map<string, Uint8Array<ArrayBuffer>>
+  /** What the next photographs meet, first first: `refused` is what will never be taken. */
+  readonly nextPhoto: ('pass' | 'drop' | 'reply-lost' | 'refused')[]
   readonly requests: { readonly what: 'push' | 'pull'; readonly records: number; readonly fault: Fault | 'pass' }[]
   /** Tells whoever listens live that something changed. */
   readonly poke: () => void
@@ -47,7 +51,20 @@ export function fakeNetwork(server: () => Reachable): FakeNetwork {
     next: [],
     weather: () => 'pass',
     requests: [],
+    photos: new Map(),
+    nextPhoto: [],
     transport: {
+      putPhoto: async (hash, bytes) => {
+        const fault = network.nextPhoto.shift() ?? (network.weather() === 'pass' ? 'pass' : 'drop')
+        if (fault === 'refused') return { state: 'refused', code: 'photo-unreadable' }
+        if (fault === 'drop') return { state: 'unanswered' }
+        network.photos.set(hash, bytes)
+        return fault === 'reply-lost' ? { state: 'unanswered' } : { state: 'kept' }
+      },
+      getPhoto: async (hash) => {
+        const bytes = network.weather() === 'pass' ? network.photos.get(hash) : undefined
+        return bytes === undefined ? null : new Blob([bytes], { type: 'image/jpeg' })
+      },
       push: (request) => send('push', request, (wire) => server().push(wire)),
       pull: (request) => send('pull', request, (wire) => server().pull(wire)),
       live: (listener) => {

@@ -110,6 +110,15 @@ export function storeContract(name: string, newDisk: () => { readonly open: () =
       expect(own).toEqual([])
     })
 
+    test('a store beside it is of its own, and is found again by the same name', async () => {
+      const disk = newDisk()
+      const photos = await (await disk.open()).beside('photos')
+      await photos.commit({ put: [['b:1', new Uint8Array([1, 2, 3])]] })
+      const other = await disk.open()
+      expect(await other.list('')).toEqual([])
+      expect(await (await other.beside('photos')).read('b:1')).toEqual(new Uint8Array([1, 2, 3]))
+    })
+
     test('a closed store takes nothing and says so', async () => {
       const store = await newDisk().open()
       store.close()

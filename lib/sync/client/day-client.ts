@@ -7,6 +7,7 @@ import type { SubjectKey } from '@/lib/inspection/subject'
 import type { PassList } from '@/lib/pass/pass-list'
 import type { PassPayload } from '@/lib/pass/pass-payload'
 import type { Role } from '@/lib/permissions/policy'
+import type { DayPhotos } from './day-photos'
 import type { DayProblem } from './day-problem'
 import type { Draft, DraftNote, SavedRecord } from './draft'
 
@@ -54,6 +55,8 @@ export interface DayClient {
   readonly issuePass: (request: IssuePass) => Promise<Issued<'pass'>>
   /** Issues a band for a person who stands at passed or passed with advisories (else `not-passed`). */
   readonly issueBand: (request: IssueBand) => Promise<Issued<'band'>>
+
+  readonly photos: DayPhotos
 
   /** Who may be unlocked here: the people of this device's enrolment. */
   readonly people: () => readonly DevicePerson[]
@@ -107,6 +110,8 @@ export interface DayStatus {
   readonly unsent: number
   /** Device clock, ms, of the oldest unsent record; null when all is sent. */
   readonly unsentSince: number | null
+  /** Photographs that a record names and the server does not have yet. */
+  readonly photosUnsent: number
   readonly needsAttention: number
   readonly lastPullAt: number | null
   readonly lastPushAt: number | null

@@ -2,6 +2,7 @@ import type { Book } from '@/lib/checklist/book'
 import type { DaySnapshot } from '@/lib/contracts/day-snapshot'
 import { foldSubject } from '@/lib/inspection/fold-subject'
 import type { LogEntry } from '@/lib/inspection/log-entry'
+import { isKnown, type AnyRecord } from '@/lib/inspection/record'
 import type { FoldContext, SubjectState } from '@/lib/inspection/state'
 import { subjectKey, type SubjectKey } from '@/lib/inspection/subject'
 import { logEntryOf, sendingOrder, type StoredRecord } from '../core/held-record'
@@ -18,6 +19,8 @@ export interface DayMemory {
   readonly clear: () => void
   readonly log: (key: SubjectKey) => readonly LogEntry[]
   readonly state: (key: SubjectKey, day: string) => SubjectState
+  /** Whether a record held here names this photograph. */
+  readonly namesPhoto: (hash: string) => boolean
   /** Moves on with each change of this subject or of the event itself. */
   readonly versionOf: (key: SubjectKey) => string
   readonly book: (checklistHash: string, limitsHash: string) => Book | null
@@ -38,6 +41,7 @@ export function dayMemory(): DayMemory {
   const shelves = new Map<SubjectKey, Shelf>()
   const folded = new Map<SubjectKey, { readonly tag: string; readonly state: SubjectState }>()
   const books = new Map<string, Book | null>()
+  const photos = new Set<string>()
   let snapshot: DaySnapshot | null = null
   let declared: ReadonlySet<SubjectKey> = new Set()
   let snapshots = 0
@@ -56,6 +60,7 @@ export function dayMemory(): DayMemory {
       stored.set(record.hash, record)
       // No record at all: kept on the disk and sent on, read by nobody.
       if (entry === null) continue
+      for (const hash of photosOf(entry.record)) photos.add(hash)
       const shelf = shelfOf(subjectKey(entry.record.subject))
       shelf.records.set(record.hash, { stored: record, entry })
       shelf.version += 1
@@ -136,8 +141,16 @@ export function dayMemory(): DayMemory {
     clear,
     log,
     state,
+    namesPhoto: (hash) => photos.has(hash),
     versionOf,
     book,
     seqs,
   }
+}
+
+/** What was photographed: what a finding shows, and the sheet that was keyed in from paper. */
+function photosOf(record: AnyRecord): readonly string[] {
+  if (!isKnown(record)) return []
+  const sheet = 'paper' in record ? record.paper?.sheet : undefined
+  return [...('photos' in record ? (record.photos ?? []) : []), ...(sheet === undefined ? [] : [sheet])]
 }

@@ -6,6 +6,9 @@ import type { DayTools } from './day-tools'
 import type { DeviceStore, StoreRoom } from './device-store'
 import type { Enrolment } from './enrolment'
 import type { Loop } from './loop'
+import type { KeptPhoto } from './day-photos'
+import type { PhotoSending } from './photo-sending'
+import type { PhotoShelf } from './photo-shelf'
 import type { SyncTransport } from './sync-transport'
 import type { Unlocking } from './unlocking'
 
@@ -18,6 +21,10 @@ export interface DayParts {
   readonly disk: DayDisk
   readonly cars: DayEntries
   readonly hands: Unlocking
+  readonly photos: PhotoShelf
+  /** Waits to be sent, and a record names it. */
+  readonly isPhotoDue: (photo: KeptPhoto) => boolean
+  readonly sending: PhotoSending
   readonly day: () => string
   /** Something changed: whoever listens reads again. */
   readonly bump: () => void

@@ -3,6 +3,7 @@ export type DayProblemCode =
   | 'storage-full'
   | 'storage-failed'
   | 'storage-low'
+  | 'no-room-for-photo'
   | 'locked'
   | 'wrong-pin'
   | 'not-allowed'

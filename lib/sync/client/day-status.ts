@@ -19,12 +19,17 @@ export function dayStatus(parts: DayParts): () => DayStatus {
   }
 }
 
-function read({ disk, enrolment, day, now }: DayParts, unlocked: DevicePerson | null, clockWentBackwards: boolean): DayStatus {
+function read(
+  { disk, enrolment, day, now, photos, isPhotoDue }: DayParts,
+  unlocked: DevicePerson | null,
+  clockWentBackwards: boolean,
+): DayStatus {
   const { seq, loaded, lastPullAt, lastPushAt, offset } = disk.pull()
   const event = disk.memory.snapshot()?.event
   const held = [...disk.memory.stored.values()]
   const unsent = held.filter(({ out }) => out === 'unsent')
-  const needsAttention = held.filter(({ out }) => out === 'attention').length
+  const refused = photos.all().filter(({ state }) => state === 'refused').length
+  const needsAttention = held.filter(({ out }) => out === 'attention').length + refused
   const times = unsent.map(({ jws }) => recordOfJws(jws)?.at ?? Number.POSITIVE_INFINITY)
   const list = disk.list()
   const { device, deviceName, kid } = enrolment.says
@@ -37,6 +42,7 @@ function read({ disk, enrolment, day, now }: DayParts, unlocked: DevicePerson | 
     unlocked,
     unsent: unsent.length,
     unsentSince: times.length === 0 ? null : Math.min(...times),
+    photosUnsent: photos.all().filter(isPhotoDue).length,
     needsAttention,
     lastPullAt,
     lastPushAt,

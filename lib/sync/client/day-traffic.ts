@@ -51,7 +51,7 @@ export function dayTraffic(parts: DayParts): DayTraffic {
     const tell = (step: LoadProgress['step'], of: number | null = null) =>
       progress?.({ step, records: disk.pull().seq, entries: disk.memory.snapshot()?.entries.length ?? 0, of })
     tell('event')
-    const outcome = await onceAlone(() => alone('loading', () => drainWith(engine, (_, of) => tell('records', of))))
+    const outcome = await onceAlone(() => alone('loading', () => drainWith(engine, parts.photos.sendAgain, (_, of) => tell('records', of))))
     if (outcome.state === 'failed') throw new DayError(outcome.problem)
     tell('checklists')
     const event = disk.memory.snapshot()?.event
@@ -77,7 +77,7 @@ export function dayTraffic(parts: DayParts): DayTraffic {
   return {
     push: () => alone('pushing', async () => outcomeOf(await engine.pushAll(), true)),
     pull: () => alone('pulling', async () => outcomeOf(await engine.pullAll(), false)),
-    drain: () => alone('pushing', () => drainWith(engine)),
+    drain: () => alone('pushing', () => drainWith(engine, parts.photos.sendAgain)),
     loadDay,
   }
 }
@@ -100,7 +100,12 @@ function engineOf({ store, tools, transport, enrolment, disk, bump }: DayParts):
   })
 }
 
-async function drainWith(engine: SyncEngine, progress?: (records: number, of: number) => void): Promise<DrainOutcome> {
+/** `onRestored`: the server forgot something it once had, so nobody knows what else. */
+async function drainWith(
+  engine: SyncEngine,
+  onRestored: () => Promise<void>,
+  progress?: (records: number, of: number) => void,
+): Promise<DrainOutcome> {
   let [sent, received] = [0, 0]
   for (let round = 0; round < MOST_ROUNDS; round += 1) {
     const pushed = await engine.pushAll()
@@ -111,6 +116,7 @@ async function drainWith(engine: SyncEngine, progress?: (records: number, of: nu
     const code = pushed.problem ?? pulled.problem
     if (code !== null) return failed(dayProblem(code), sent, received)
     if (!pulled.again) break
+    await onRestored()
   }
   return { state: 'done', sent, received }
 }

@@ -19,6 +19,8 @@ export interface DeviceStore {
   readonly tryLock: <T>(name: string, work: () => Promise<T>) => Promise<T | null>
   /** Tells of the keys that other tabs have committed; returns how to stop. */
   readonly onOtherTab: (listener: (keys: readonly string[]) => void) => () => void
+  /** Another store of the same device and event, for what is heavy and is counted apart; found again by the same name. */
+  readonly beside: (name: string) => Promise<DeviceStore>
   readonly room: () => Promise<StoreRoom>
   /** Asks that the browser never evicts this; false when it will not promise. */
   readonly persist: () => Promise<boolean>

@@ -9,6 +9,7 @@ import { syncPush } from '@/lib/contracts/sync-push'
 import { urlOf } from '@/lib/http/call'
 import type { Enrolment } from './enrolment'
 import { signJwsWith } from './device-key'
+import { httpPhotos } from './http-photos'
 import { readEventStream } from './read-event-stream'
 import type { DayTools } from './day-tools'
 import type { NoAnswer, SyncTransport, TransportReply } from './sync-transport'
@@ -20,14 +21,16 @@ const GIVE_UP_MS = 30_000
 export function httpTransport(enrolment: Enrolment, tools: Pick<DayTools, 'now' | 'sha256'>): SyncTransport {
   let offset = 0
 
-  async function headersFor(method: Contract['method'], path: string, body: string): Promise<Record<string, string>> {
+  const headersFor = (method: Contract['method'], path: string, body: string) => signed(method, path, tools.sha256(body), body !== '')
+
+  async function signed(method: Contract['method'], path: string, body: string, isJson = false): Promise<Record<string, string>> {
     const iat = Math.floor((tools.now() + offset) / 1000)
     const { device, event } = enrolment.says
-    const token: DeviceToken = { device, event, method, path, iat, exp: iat + DEVICE_TOKEN_LIFE_SECONDS, body: tools.sha256(body) }
+    const token: DeviceToken = { device, event, method, path, iat, exp: iat + DEVICE_TOKEN_LIFE_SECONDS, body }
     return {
       authorization: `Device ${await signJwsWith(enrolment.key, DEVICE_TOKEN_TYPE, device, token)}`,
       [CERTIFICATE_HEADER]: enrolment.certificate,
-      ...(body === '' ? {} : { 'content-type': 'application/json' }),
+      ...(isJson ? { 'content-type': 'application/json' } : {}),
     }
   }
 
@@ -53,6 +56,7 @@ export function httpTransport(enrolment: Enrolment, tools: Pick<DayTools, 'now' 
 
   return {
     push: (request) => ask(syncPush, syncPush.response, {}, request),
+    ...httpPhotos(signed, tools.sha256('')),
     pull: (query) => ask(syncPull, syncPull.response, query, null),
     setOffset: (next) => {
       offset = next

@@ -9,11 +9,15 @@ import { daySaving } from './day-saving'
 import { dayStatus } from './day-status'
 import { dayTraffic } from './day-traffic'
 import type { DayWorld } from './day-world'
+import type { KeptPhoto } from './day-photos'
 import type { DeviceStore } from './device-store'
 import { KEYS, type Enrolment } from './enrolment'
 import { issuing } from './issuing'
 import { startLoop } from './loop'
 import { overlaidList } from './overlaid-list'
+import { photoAccess } from './photo-access'
+import { photoSending } from './photo-sending'
+import { photoShelf } from './photo-shelf'
 import { dayError } from './problem-of'
 import { unlocking } from './unlocking'
 
@@ -44,7 +48,8 @@ export async function openDay(store: DeviceStore, world: DayWorld): Promise<DayC
     bump()
   })
   const cars = dayEntries(disk.memory, day)
-  const parts: DayParts = { store, tools, transport, enrolment, disk, cars, hands, day, bump, heard: hearing.heard, now }
+  const photoParts = await openPhotos(store, { disk, tools, transport, bump })
+  const parts: DayParts = { store, tools, transport, enrolment, disk, cars, hands, ...photoParts, day, bump, heard: hearing.heard, now }
   return {
     ...assemble(parts, world),
     subscribe: (listener) => {
@@ -54,9 +59,25 @@ export async function openDay(store: DeviceStore, world: DayWorld): Promise<DayC
     close: () => {
       now.loop?.stop()
       hearing.stop()
+      photoParts.close()
       store.close()
     },
   }
+}
+
+/** The photographs lie in a store of their own: records are read whole at every start, and must not wait for megabytes. */
+async function openPhotos(store: DeviceStore, { disk, tools, transport, bump }: Pick<DayParts, 'disk' | 'tools' | 'transport' | 'bump'>) {
+  const { memory } = disk
+  const own = await store.beside('photos')
+  const photos = await photoShelf({ store: own, now: tools.now, isNamed: memory.namesPhoto, bump })
+  const isPhotoDue = ({ hash, state }: KeptPhoto) => state === 'waits' && memory.namesPhoto(hash)
+  const recordsWait = () => [...memory.stored.values()].some(({ out }) => out === 'unsent')
+  const sending = photoSending({ shelf: photos, store: own, transport, tools, isDue: isPhotoDue, recordsWait })
+  const close = () => {
+    sending.stop()
+    own.close()
+  }
+  return { photos, isPhotoDue, sending, close }
 }
 
 function assemble(parts: DayParts, world: DayWorld): Omit<DayClient, 'subscribe' | 'close'> {
@@ -83,6 +104,7 @@ function assemble(parts: DayParts, world: DayWorld): Omit<DayClient, 'subscribe'
     note: (hash) => disk.notes.get(hash)?.text ?? null,
     // The records come back in the order of the drafts, each of its draft's kind: what `SavedRecords` says and the compiler cannot see.
     record: async (drafts, notes = []) => (await save(async () => drafts, notes)).saved as never,
+    photos: photoAccess(parts),
     issuePass: issue.pass,
     issueBand: issue.band,
     people: hands.people,
@@ -106,13 +128,18 @@ function hearOtherTabs(store: DeviceStore, take: (keys: readonly string[]) => Pr
 }
 
 function start(
-  { tools, transport, bump, now }: DayParts,
+  { tools, transport, bump, now, sending }: DayParts,
   world: DayWorld,
   drain: DayClient['drain'],
   status: DayClient['status'],
 ): () => void {
   const loop = startLoop({
-    drain,
+    drain: async () => {
+      const outcome = await drain()
+      // The records are through: now the photographs, without holding up the next turn.
+      if (outcome.state !== 'failed') sending.kick()
+      return outcome
+    },
     transport,
     tools,
     network: world.network,

@@ -21,6 +21,11 @@ export const DAY_PROBLEMS: Readonly<Record<DayProblemCode, Omit<DayProblem, 'cod
     kept: ALL_KEPT,
     todo: 'Send what is unsent and free some room before the next car.',
   },
+  'no-room-for-photo': {
+    what: 'This device has no room left for the photograph.',
+    kept: 'Everything recorded is still on this device. The photograph was not kept.',
+    todo: 'Free some room and take it again, or answer without it and say so in words.',
+  },
   locked: { what: 'Nobody is unlocked on this device.', kept: NOTHING_SAVED, todo: 'Unlock with your six digits, then save again.' },
   'wrong-pin': { what: 'These are not the six digits set on this device.', kept: ALL_KEPT, todo: 'Try again, or set new digits.' },
   'not-allowed': {

@@ -26,6 +26,7 @@ export async function indexedDbStore(name: string): Promise<DeviceStore> {
       channel?.addEventListener('message', hear)
       return () => channel?.removeEventListener('message', hear)
     },
+    beside: (other) => indexedDbStore(`${name}-${other}`),
     room,
     persist: async () => (typeof navigator === 'undefined' ? false : ((await navigator.storage?.persist?.()) ?? false)),
     close: () => {

@@ -10,10 +10,11 @@ export interface MemoryDisk {
   /** What the next commits meet, first first: nothing of them is kept. */
   readonly faults: ('full' | 'failed' | 'killed')[]
   leftBytes: number | null
+  readonly beside: Map<string, MemoryDisk>
 }
 
 export function memoryDisk(name = 'disk'): MemoryDisk {
-  return { name, values: new Map(), locks: lockQueue(), tabs: new Set(), faults: [], leftBytes: 1_000_000_000 }
+  return { name, values: new Map(), locks: lockQueue(), tabs: new Set(), faults: [], leftBytes: 1_000_000_000, beside: new Map() }
 }
 
 /** A store on such a disk: one tab of one device. */
@@ -40,6 +41,11 @@ export function memoryDeviceStore(disk: MemoryDisk): DeviceStore {
     onOtherTab: (listener) => {
       listeners.add(listener)
       return () => listeners.delete(listener)
+    },
+    beside: async (name) => {
+      const other = disk.beside.get(name) ?? memoryDisk(`${disk.name}-${name}`)
+      disk.beside.set(name, other)
+      return memoryDeviceStore(other)
     },
     room: async () => ({ leftBytes: disk.leftBytes, persisted: true }),
     persist: async () => true,
