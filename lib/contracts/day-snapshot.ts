@@ -49,7 +49,9 @@ export const daySnapshot = z.object({
       /** Car facts as the organiser or a declaration gives them; what is absent is not known. */
       facts: figures,
       declaration: z.nullable(z.object({ id: z.string(), version: z.int() })),
-      /** What the signed declaration says check by check: values by field. Beside what is looked at, never instead of it. */
+      /** When that was signed, ms. */
+      declaredAt: z.nullable(z.int()),
+      /** What the signed declaration says: values by field, by `declaredKey` (`<check>`, or `<check>@<person>` for kit). Beside what is looked at, never instead of it. */
       declared: z.record(z.string(), figures),
       /** Standing findings of the car's last event, for a yes or no (rule F11). */
       history: z.array(

@@ -1,12 +1,17 @@
 import { board } from './board'
 import type { Contract } from './contract'
 import { decideCrew, listCrew } from './crew'
+import { openEntryLink } from './entry-link'
+import { eventDeclarations } from './event-declarations'
 import { enrolDevice, listDevices, retireDevice } from './devices'
 import { entryImport } from './entry-import'
 import { join, joinState, makeJoinCode, seeJoinCode } from './join'
 import { live } from './live'
 import { me } from './me'
 import { getPhoto, putPhoto } from './photos'
+import { saveDraft, signDeclaration } from './my-declaration'
+import { myEntry } from './my-entry'
+import { addCar, addKit, keepCar, keepKit } from './my-garage'
 import { signIn } from './sign-in'
 import { signOut } from './sign-out'
 import { syncPull } from './sync-pull'
@@ -33,4 +38,13 @@ export const CONTRACTS: readonly Contract[] = [
   entryImport,
   putPhoto,
   getPhoto,
+  openEntryLink,
+  myEntry,
+  saveDraft,
+  signDeclaration,
+  addCar,
+  keepCar,
+  addKit,
+  keepKit,
+  eventDeclarations,
 ]

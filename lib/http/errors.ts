@@ -151,6 +151,30 @@ export const ERRORS: Readonly<Record<ProblemCode, ErrorWords>> = {
     todo: 'Use a device that is already enrolled.',
   },
   'device-decided': { status: 409, what: 'This device is no longer active.', kept: 'It stays as it was.', todo: 'Reload the list.' },
+  'entry-link-over': {
+    status: 410,
+    what: 'This link is not known, has run out, or was taken back.',
+    kept: 'What you declared is kept.',
+    todo: 'Ask the organiser for a new link, or sign in with your password.',
+  },
+  'entry-link-needs-password': {
+    status: 409,
+    what: 'Your account may do more than declare a car, so a link from a mail does not open it.',
+    kept: NOTHING_CHANGED,
+    todo: 'Sign in with your password, then open the link again.',
+  },
+  'entry-link-no-address': {
+    status: 409,
+    what: 'The entry has no e-mail address for you yet.',
+    kept: NOTHING_CHANGED,
+    todo: 'Ask the organiser to add it, then open the link again.',
+  },
+  'declaration-closed': {
+    status: 409,
+    what: 'This entry takes no declaration any more: it is withdrawn, or the event is over.',
+    kept: 'What was signed before stands.',
+    todo: 'Speak to the organiser if that is a mistake.',
+  },
   'import-refused': {
     status: 422,
     what: 'The list has rows that cannot be read.',

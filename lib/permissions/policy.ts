@@ -13,11 +13,15 @@ export type CrewRole = (typeof CREW_ROLES)[number]
 export const POLICY = {
   'event:see': ['admin', 'organiser', 'chief', 'scrutineer', 'helper', 'sign-on', 'marshal'],
   'event:edit': ['admin', 'organiser'],
+  /** One's own: whoever sits in the entry. Whose it is, the command looks. */
+  'entry:own': ['entrant'],
   'entries:import': ['admin', 'organiser'],
   'entries:see': ['admin', 'organiser', 'chief'],
   'board:see': ['admin', 'organiser', 'chief', 'scrutineer', 'helper', 'sign-on', 'marshal'],
   'crew:accept': ['admin', 'organiser'],
   'crew:see': ['admin', 'organiser', 'chief'],
+  /** One's own cars and kit. */
+  'garage:keep': ['entrant'],
   'join-code:make': ['admin', 'organiser'],
   'device:enrol': ['chief', 'scrutineer', 'helper', 'sign-on', 'marshal', 'organiser'],
   'device:retire': ['admin', 'organiser'],

@@ -6,6 +6,8 @@ import { type Action, can, POLICY, type Role, ROLES } from '@/lib/permissions/po
 const MATRIX: Readonly<Record<Action, string>> = {
   'event:see': '            yes   yes       yes   yes        yes    yes     yes     no',
   'event:edit': '           yes   yes       no    no         no     no      no      no',
+  'entry:own': '            no    no        no    no         no     no      no      yes',
+  'garage:keep': '          no    no        no    no         no     no      no      yes',
   'entries:import': '       yes   yes       no    no         no     no      no      no',
   'entries:see': '          yes   yes       yes   no         no     no      no      no',
   'board:see': '            yes   yes       yes   yes        yes    yes     yes     no',

@@ -108,6 +108,14 @@ const MAY: Readonly<Record<string, readonly Role[]>> = {
   'device-list': ['admin', 'organiser', 'chief'],
   'device-retire': ['admin', 'organiser'],
   'entry-import': ['admin', 'organiser'],
+  'my-entry': ['entrant'],
+  'declaration-draft': ['entrant'],
+  'declaration-sign': ['entrant'],
+  'car-add': ['entrant'],
+  'car-keep': ['entrant'],
+  'kit-add': ['entrant'],
+  'kit-keep': ['entrant'],
+  'event-declarations': ['admin', 'organiser', 'chief'],
   board: ['admin', 'organiser', 'chief', 'scrutineer', 'helper', 'sign-on', 'marshal'],
 }
 

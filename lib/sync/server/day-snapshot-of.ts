@@ -3,6 +3,7 @@ import { and, asc, desc, eq, inArray } from 'drizzle-orm'
 import type { Db } from '@/db/client'
 import { car, crewMember, declaration, device, entry, entryPerson, type event, person, runGroup, timetableBlock } from '@/db/schema'
 import type { DaySnapshot } from '@/lib/contracts/day-snapshot'
+import { partsOf } from '@/lib/contracts/declaration'
 import { plateTail } from '@/lib/pass/plate-tail'
 import { sha256 } from '@/lib/platform/sha256'
 import type { EventFrame } from './event-frame'
@@ -116,6 +117,7 @@ function readEntries(database: Db, eventId: string): DaySnapshot['entries'] {
   )
   return rows.map((each) => {
     const signed = declared.get(each.entry.id)?.find(({ signedAt }) => signedAt !== null)
+    const parts = partsOf(signed?.body)
     return {
       id: each.entry.id,
       code: each.entry.code,
@@ -125,15 +127,21 @@ function readEntries(database: Db, eventId: string): DaySnapshot['entries'] {
       colour: each.car.colour,
       model: each.car.model,
       group: each.entry.groupId,
-      facts: { ...each.entry.facts },
+      // What the organiser knows stands; what they do not know the declaration says.
+      facts: { ...parts.facts, ...knownOf(each.entry.facts) },
       declaration: signed === undefined ? null : { id: signed.id, version: signed.version },
-      declared: {},
+      declaredAt: signed?.signedAt ?? null,
+      declared: parts.answers,
       history: [],
       people: (aboard.get(each.entry.id) ?? []).map(({ personId, role }) => ({ person: personId, role })),
       withdrawn: each.entry.withdrawn,
       note: each.entry.note,
     }
   })
+}
+
+function knownOf(facts: Readonly<Record<string, string | number | boolean | null>>): Readonly<Record<string, string | number | boolean>> {
+  return Object.fromEntries(Object.entries(facts).flatMap(([name, value]) => (value === null ? [] : [[name, value] as const])))
 }
 
 function readTimetable(database: Db, eventId: string): DaySnapshot['timetable'] {

@@ -1,0 +1,14 @@
+import type { Db } from '@/db/client'
+import type { Book } from '@/lib/checklist/book'
+import type { SubjectState } from '@/lib/inspection/state'
+import type { SubjectKey } from '@/lib/inspection/subject'
+
+/** An event's log as an entrant's page needs it; the log is the sync's own, so the route hands its reading in. */
+export interface DayReading {
+  readonly day: string
+  readonly stateOf: (key: SubjectKey) => SubjectState
+  readonly entryNow: (entryId: string) => { readonly number: string; readonly group: string } | null
+  readonly bookOf: (checklistHash: string, limitsHash: string) => Book | null
+}
+
+export type ReadDay = (database: Db, eventId: string, now: number) => DayReading | null
