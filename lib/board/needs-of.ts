@@ -1,6 +1,8 @@
 import type { Book } from '@/lib/checklist/book'
+import { holdWords } from '@/lib/checklist/resolve-hold'
 import { NEED_KINDS, type BoardRow } from '@/lib/contracts/board'
-import type { LogEntry, QuarantineCode } from '@/lib/inspection/log-entry'
+import type { LogEntry } from '@/lib/inspection/log-entry'
+import { QUARANTINE_WORDS } from '@/lib/inspection/quarantine-words'
 import { isKnown } from '@/lib/inspection/record'
 import type { Block, CheckState, SubjectState } from '@/lib/inspection/state'
 import { isStandingWell } from '@/lib/inspection/verdict'
@@ -58,24 +60,12 @@ function needsOfSetAside(state: SubjectState, setAside: readonly LogEntry[], boo
   const codes = [...new Set(open.map(({ code }) => code))]
   return codes.map((code) => {
     const ids = open.filter((one) => one.code === code).map(({ check }) => check)
-    return { kind: 'set-aside', words: `A record was set aside, ${SET_ASIDE[code]}: ${nameChecks(ids, book)}` }
+    return { kind: 'set-aside', words: `A record was set aside, ${QUARANTINE_WORDS[code]}: ${nameChecks(ids, book)}` }
   })
 }
 
-/** Why a record's permission was taken away (rule T1). */
-const SET_ASIDE: Readonly<Record<QuarantineCode, string>> = {
-  'wrong-role': 'the role does not allow it',
-  'device-retired': 'its device was retired',
-  'device-lost': 'its device was reported lost',
-  'milder-than-rule': 'milder than its own figures',
-  'unseen-of-another': 'it takes back another person’s finding',
-  'shown-differs': 'made while the screen showed another number or plate',
-  'unknown-enrolment': 'nobody vouches for its device',
-  'not-all-heads-named': 'it does not name all it would settle',
-}
-
 function blockInWords({ kind, reason, stations, checksLeft, onlyChiefLifts }: Block, book: Book | null): string {
-  const words = inASentence(book?.checklist.holdReasons.find(({ id }) => id === reason)?.text ?? reason.replaceAll('-', ' '))
+  const words = inASentence(holdWords(reason, book))
   const why = { hold: `Held: ${words}`, recall: 'Recall due', wet: 'Held: wet declared', unknown: 'Held by a newer version of the app' }[
     kind
   ]

@@ -1,40 +1,54 @@
 'use client'
 
 import { useDay } from '@/app/_crew/day-context'
-import { clockTime } from '@/app/_crew/say-when'
+import { recallsOf } from '@/app/_crew/recalls-here'
+import { useChiefsDevice } from '@/app/_crew/use-chiefs-device'
+import { useMinute } from '@/app/_crew/use-minute'
 import { OutcomeShape } from '@/app/_ui/outcome-shape'
-import { blocksOf } from '@/lib/pass/build-pass-list'
-import { can } from '@/lib/permissions/policy'
-import { useDayStatus } from '@/lib/sync/client/use-day'
+import { standsAgainst } from '@/lib/inspection/stands-against'
+import { AgainstLine } from './against-line'
 import { LiftForm } from './lift-form'
 import type { Walk } from './use-walk'
 
-/** Holds and due recalls: why, since when, what to see again; the chief may lift a hold, with the reason in words. */
+/** What stands against it: holds and due recalls with why, since when, by whom and what to see again; then the recalls to come. The chief may lift. */
 export function BlockList({ walk }: { readonly walk: Walk }) {
   const day = useDay()
-  const { unlocked } = useDayStatus(day)
-  const { blocks } = walk.state
-  if (blocks.length === 0) return null
-  const zone = day.snapshot()?.event.timeZone ?? 'UTC'
-  const listed = blocksOf(walk.state, walk.book).filter(({ kind }) => kind !== 'fail')
-  const holds = blocks.filter(({ kind }) => kind === 'hold' || kind === 'unknown').map(({ hash }) => hash)
-  const mayLift = can(unlocked?.roles ?? [], 'record:lifted') && holds.length > 0
+  const isChief = useChiefsDevice()
+  const now = useMinute()
+  const { state, subject } = walk
+  const all = standsAgainst([...day.log(state.key), ...day.dayLog()], state.key, state)
+  const byClock = new Set(now === null ? [] : recallsOf(day, subject, now).map(({ hash }) => hash))
+  const isUp = ({ hash, state: stands }: (typeof all)[number]) => stands === 'standing' || (stands === 'waiting' && byClock.has(hash))
+  const standing = all.filter(isUp)
+  const waiting = all.filter((one) => one.state === 'waiting' && !isUp(one))
+  const mayBeLifted = all.filter(({ kind, state: stands }) => stands !== 'ended' && kind !== 'wet')
   return (
-    <section className="border-l-8 border-line bg-surface p-4" aria-labelledby="held">
-      <h2 id="held" className="flex items-center gap-2 text-lg">
-        <OutcomeShape state="held" className="size-7" /> Held
-      </h2>
-      <ul className="mt-2 grid gap-2">
-        {listed.map((block) => (
-          <li key={`${block.kind} ${block.words} ${block.at}`}>
-            <span className="font-bold">{block.words}</span>
-            {block.at !== null && `, ${clockTime(block.at, zone)}`}
-            {block.seeAgain.length > 0 && <span className="block">See again: {block.seeAgain.join(', ')}</span>}
-            {block.stickerRemoved === false && <span className="block">The sticker was left on: take it off.</span>}
-          </li>
-        ))}
-      </ul>
-      {mayLift && <LiftForm subject={walk.subject} holds={holds} />}
-    </section>
+    <>
+      {standing.length > 0 && (
+        <section className="border-l-8 border-line bg-surface p-4" aria-labelledby="held">
+          <h2 id="held" className="flex items-center gap-2 text-lg">
+            <OutcomeShape state="held" className="size-7" /> Held
+          </h2>
+          <ul className="mt-2 grid gap-4">
+            {standing.map((against) => (
+              <AgainstLine key={against.hash} against={against} walk={walk} isByClock={byClock.has(against.hash)} />
+            ))}
+          </ul>
+        </section>
+      )}
+      {waiting.length > 0 && (
+        <section className="border-l-8 border-accent bg-surface p-4" aria-labelledby="recalls">
+          <h2 id="recalls" className="text-lg">
+            To be shown again
+          </h2>
+          <ul className="mt-2 grid gap-4">
+            {waiting.map((against) => (
+              <AgainstLine key={against.hash} against={against} walk={walk} isByClock={false} />
+            ))}
+          </ul>
+        </section>
+      )}
+      {isChief && mayBeLifted.length > 0 && <LiftForm walk={walk} against={mayBeLifted} />}
+    </>
   )
 }

@@ -5,6 +5,7 @@ import { goTo } from '@/app/_crew/use-location'
 import { Button } from '@/app/_ui/button'
 import type { DayEntry } from '@/lib/sync/client/day-client'
 import { useSubjectState } from '@/lib/sync/client/use-day'
+import { CarActs } from './car-acts'
 import { CarHeader } from './car-header'
 import { CarTabs } from './car-tabs'
 import { WalkOrPlace } from './walk-or-place'
@@ -39,6 +40,7 @@ export function CarScreen({ entry, rest }: CarScreenProps) {
           told={toldOfPerson(car.presentedHeads[0]?.record.facts.roof)}
         />
       )}
+      {place === null && <CarActs entry={entry} subject={person === null ? { car: entry.id } : { person }} />}
       <div className="px-4 pb-6">
         <Button look="quiet" onClick={() => goTo('/bay')}>
           Another car

@@ -7,8 +7,8 @@ import type { Head } from '@/lib/inspection/state'
 import type { WalkItem } from '@/lib/walk/walk-plan'
 import { headWords } from './head-words'
 
-const SHAPES = { ok: 'ok', advisory: 'advisory', fail: 'fail', 'could-not-see': 'ask', unseen: 'none' } as const
-const WORDS = { ok: 'ok', advisory: 'advisory', fail: 'fail', 'could-not-see': 'could not see', unseen: 'taken back' } as const
+export const HEAD_SHAPES = { ok: 'ok', advisory: 'advisory', fail: 'fail', 'could-not-see': 'ask', unseen: 'none' } as const
+export const HEAD_WORDS = { ok: 'ok', advisory: 'advisory', fail: 'fail', 'could-not-see': 'could not see', unseen: 'taken back' } as const
 
 /** What has been said of this check already: who, when, on what grounds. Two who differ are both shown. */
 export function HeadsSoFar({ item }: { readonly item: WalkItem }) {
@@ -36,9 +36,9 @@ function HeadLine({ head, item }: { readonly head: Head; readonly item: WalkItem
   const grounds = headWords(head, item.check, day.note)
   return (
     <li className="flex items-start gap-2">
-      <OutcomeShape state={SHAPES[head.outcome]} className="mt-1 size-5" />
+      <OutcomeShape state={HEAD_SHAPES[head.outcome]} className="mt-1 size-5" />
       <span>
-        {clockTime(head.record.at + head.record.offset, snapshot?.event.timeZone ?? 'UTC')} {WORDS[head.outcome]}, {who}
+        {clockTime(head.record.at + head.record.offset, snapshot?.event.timeZone ?? 'UTC')} {HEAD_WORDS[head.outcome]}, {who}
         {grounds === '' ? '' : `: ${grounds}`}
         {head.lapsed ? ' (of another day: see it today)' : ''}
         {head.quarantined ? ' (without the right to say so)' : ''}

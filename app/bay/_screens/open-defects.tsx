@@ -14,7 +14,9 @@ const OPEN_OR_NOTED: readonly string[] = ['fail', 'could-not-see', 'advisory', '
 /** What is open before the verdict, each a way to its check. */
 export function OpenDefects({ walk, base }: { readonly walk: Walk; readonly base: string }) {
   const lines = walk.plan.flatMap(({ place, oneByOne, together }) =>
-    [...oneByOne, ...together].filter(({ state }) => OPEN_OR_NOTED.includes(state?.standing ?? '')).map((item) => ({ place, item })),
+    [...oneByOne, ...together]
+      .filter(({ state }) => OPEN_OR_NOTED.includes(state?.standing ?? '') || state?.disagreement)
+      .map((item) => ({ place, item })),
   )
   if (lines.length === 0) return null
   return (

@@ -51,7 +51,7 @@ export const STATE_WORDS: Readonly<Record<OutcomeState, string>> = {
   ok: 'ok',
   advisory: 'advisory',
   fail: 'fail',
-  ask: 'could not see or undecided',
+  ask: 'could not see, undecided, or two looks differ',
   none: 'not seen yet',
   na: 'does not apply',
   held: 'held',
@@ -59,12 +59,14 @@ export const STATE_WORDS: Readonly<Record<OutcomeState, string>> = {
 
 /** The shape of one check as it stands. */
 export function stateOf(item: WalkItem): OutcomeState {
+  // Two who differ are never shown as one of them, nor as a hole.
+  if (item.state?.disagreement) return 'ask'
   if (item.seeAgain && item.state?.standing !== 'fail') return 'none'
   switch (item.state?.standing) {
     case 'ok':
     case 'advisory':
     case 'fail':
-      return item.state.disagreement ? 'ask' : item.state.standing
+      return item.state.standing
     case 'could-not-see':
     case 'undecided':
       return 'ask'

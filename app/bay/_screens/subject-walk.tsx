@@ -6,6 +6,7 @@ import { Notice } from '@/app/_ui/notice'
 import { UndoBar } from '@/app/_ui/undo-bar'
 import type { CarFacts } from '@/lib/checklist/car-facts'
 import { BlockList } from './block-list'
+import { ForTheChief } from './for-the-chief'
 import { openStop } from './open-stop'
 import { Presenting } from './presenting'
 import type { Undo } from './use-undo'
@@ -50,6 +51,7 @@ export function SubjectWalk({ walk, base, told, undo }: SubjectWalkProps) {
       ) : (
         <Presenting walk={walk} book={book} told={told} onDone={isPresented ? () => setChanging(false) : null} />
       )}
+      <ForTheChief walk={walk} />
       <ProblemNotice problem={undo.problem} />
       {undo.done !== null && <UndoBar done={undo.done} onUndo={takeBack} />}
     </div>

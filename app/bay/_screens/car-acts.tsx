@@ -1,0 +1,53 @@
+'use client'
+
+import { useState } from 'react'
+import { useDay } from '@/app/_crew/day-context'
+import { DaySwitchesPanel } from '@/app/_crew/day-switches-panel'
+import { HoldSheet } from '@/app/_crew/hold-sheet'
+import { Button } from '@/app/_ui/button'
+import { Sheet } from '@/app/_ui/sheet'
+import { can } from '@/lib/permissions/policy'
+import type { DayEntry } from '@/lib/sync/client/day-client'
+import { useDayStatus } from '@/lib/sync/client/use-day'
+import { RecallSheet } from './recall-sheet'
+import type { WalkSubject } from './use-walk'
+
+interface CarActsProps {
+  readonly entry: DayEntry
+  /** Whose walk is shown: the car's, or a person's who sits in it. */
+  readonly subject: WalkSubject
+}
+
+/** What may be done besides looking: hold it or somebody in it, recall it, and for whoever may the switches of the whole day. */
+export function CarActs({ entry, subject }: CarActsProps) {
+  const { unlocked } = useDayStatus(useDay())
+  const [open, setOpen] = useState<'hold' | 'recall' | 'event' | null>(null)
+  const roles = unlocked?.roles ?? []
+  const close = () => setOpen(null)
+  return (
+    <section className="flex flex-wrap gap-3 px-4 pb-4" aria-label="Hold and recall">
+      {can(roles, 'record:hold') && (
+        <Button look="secondary" onClick={() => setOpen('hold')}>
+          Hold {entry.number}
+        </Button>
+      )}
+      {can(roles, 'record:recall') && (
+        <Button look="secondary" onClick={() => setOpen('recall')}>
+          {'car' in subject ? `Recall ${entry.number}` : 'Recall this person'}
+        </Button>
+      )}
+      {can(roles, 'record:day') && (
+        <Button look="secondary" onClick={() => setOpen('event')}>
+          Wet, sessions over
+        </Button>
+      )}
+      {open === 'hold' && <HoldSheet entry={entry.id} onHeld={close} onClose={close} />}
+      {open === 'recall' && <RecallSheet entry={entry} subject={subject} onClose={close} />}
+      {open === 'event' && (
+        <Sheet isOpen title="For the whole event" onClose={close}>
+          <DaySwitchesPanel />
+        </Sheet>
+      )}
+    </section>
+  )
+}
