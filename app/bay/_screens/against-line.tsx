@@ -6,6 +6,7 @@ import { sayDue } from '@/app/_crew/day-switches'
 import { recallWith } from '@/app/_crew/hold-drafts'
 import { ProblemNotice } from '@/app/_crew/problem-notice'
 import { useAction } from '@/app/_crew/use-action'
+import { useMinute } from '@/app/_crew/use-minute'
 import { Button } from '@/app/_ui/button'
 import { holdRow } from '@/lib/checklist/resolve-hold'
 import { isKnown } from '@/lib/inspection/record'
@@ -79,12 +80,13 @@ function DueByClock({ against: { record } }: { readonly against: Against }) {
 /** A hold of this reason brings a recall: whoever held it could not make one, so it is made here. */
 function RecallThatComesWith({ against, walk }: Pick<AgainstLineProps, 'against' | 'walk'>) {
   const day = useDay()
+  const now = useMinute()
   const { busy, problem, act } = useAction()
   const { record, at } = against
   const entry = 'car' in walk.subject ? day.entry(walk.subject.car) : null
   const row = isKnown(record) && record.kind === 'hold' ? holdRow(record.reason, walk.book) : null
-  if (entry === null || row === null) return null
-  const recalls = recallWith(day, { entry, row, now: Date.now() })
+  if (entry === null || row === null || now === null) return null
+  const recalls = recallWith(day, { entry, row, now })
   const isMade = day
     .log(walk.state.key)
     .some((one) => isKnown(one.record) && one.record.kind === 'recall' && one.record.at + one.record.offset >= at)
