@@ -1,11 +1,14 @@
 // `npm run demo`: from a fresh clone to a served demo event, saying what it does. A second run starts at once.
-// `PORT` moves it; `npm run demo -- --fresh` sets today's data aside and seeds anew.
+// `PORT` moves it; `npm run demo -- --fresh` sets today's data aside and seeds anew; `npm run demo -- --lan` serves phones on the local network by https.
 import { spawnSync } from 'node:child_process'
 import { closeSync, existsSync, mkdirSync, openSync, readFileSync } from 'node:fs'
 import { createServer } from 'node:net'
 import { ensureBuilt } from './steps/build.mjs'
 import { ensureSeeded } from './steps/demo-data.mjs'
 import { ensureInstalled } from './steps/install.mjs'
+import { lanAddress } from './steps/lan-address.mjs'
+import { startCertificatePage, startLanProxy } from './steps/lan-proxy.mjs'
+import { localCertificate } from './steps/local-authority.mjs'
 import { inRoot, root } from './steps/root.mjs'
 import { endAll, endAllOnSignals, start } from './steps/run.mjs'
 import { main, Refusal, say, seconds, step } from './steps/say.mjs'
@@ -20,14 +23,18 @@ await main(async () => {
   watchParent(() => end('SIGTERM'))
   const port = readPort(process.env.PORT)
   checkNode()
+  const lan = process.argv.includes('--lan') ? { address: lanAddress(), inner: port + 1, page: port + 2 } : null
   await refuseTakenPort(port)
+  if (lan) for (const other of [lan.inner, lan.page]) await refuseTakenPort(other)
   mkdirSync(inRoot('.demo'), { recursive: true })
   await ensureInstalled()
   await ensureBuilt()
-  const origin = `http://localhost:${port}`
+  const origin = lan ? `https://${lan.address}:${port}` : `http://localhost:${port}`
   const demo = await ensureSeeded({ origin, fresh: process.argv.includes('--fresh') })
-  const server = await step(`Starting the server on port ${port}`, () => serve(port, origin, demo.database))
+  const server = await step(`Starting the server on port ${port}`, () => serve(lan ? lan.inner : port, origin, demo.database, lan !== null))
+  if (lan) await openToPhones(lan, port, origin)
   sayWhereToGo(origin, demo.said)
+  if (lan) await sayHowToTrust(lan)
   await new Promise((done) => server.on('exit', done))
   await endAll()
   throw new Refusal(`The server ended by itself. The end of its log (${LOG}):\n${logTail()}`)
@@ -55,9 +62,24 @@ async function refuseTakenPort(port) {
   )
 }
 
-async function serve(port, origin, database) {
+/** https for the phones, and beside it, without https, the page on which they get the certificate that makes them trust it. */
+async function openToPhones({ address, inner, page }, port, origin) {
+  const { key, cert, authority } = localCertificate(inRoot('.demo/lan'), address)
+  await startLanProxy({ port, address, inner, key, cert })
+  await startCertificatePage({ port: page, address, origin, authority })
+}
+
+async function sayHowToTrust({ address, page }) {
+  const link = `http://${address}:${page}`
+  const { toString } = (await import('qrcode')).default
+  say(`\nOn each phone once: open ${link} and install the demo's certificate (README, “On real phones”).\n`)
+  say(await toString(link, { type: 'terminal', small: true }))
+}
+
+async function serve(port, origin, database, isBehindProxy) {
   const log = openSync(inRoot(LOG), 'w')
-  const server = start(process.execPath, [`${root}/node_modules/next/dist/bin/next`, 'start', '-p', String(port)], {
+  const only = isBehindProxy ? ['-H', '127.0.0.1'] : []
+  const server = start(process.execPath, [`${root}/node_modules/next/dist/bin/next`, 'start', '-p', String(port), ...only], {
     env: { PORT: String(port), LOCKWIRE_DB: database, LOCKWIRE_ORIGIN: origin, NODE_ENV: 'production' },
     stdio: ['ignore', log, log],
   })
