@@ -11,12 +11,14 @@ import { sha256 } from '@/lib/platform/sha256'
 import { MARRAM } from './marram'
 import type { SeededMarram } from './seed-marram'
 
+const NOTHING_SAID = { encoding: null, headingRow: null, columns: null, corrections: [], leftOut: [] }
+
 /** Imports the demo's entry list by the very command the organiser's page uses: a dry run first, then what it planned. Once per event. */
 export function seedMarramEntries(database: Db, seeded: SeededMarram, now: number): void {
-  const text = readFileSync(resolve(process.cwd(), MARRAM.entryList), 'utf8')
+  const base64 = readFileSync(resolve(process.cwd(), MARRAM.entryList)).toString('base64')
   const before = database.select({ textHash: entryImport.textHash }).from(entryImport).where(eq(entryImport.eventId, seeded.eventId)).all()
-  if (before.some(({ textHash }) => textHash === sha256(text))) return
-  const list = { fileName: 'entries.csv', text }
+  if (before.some(({ textHash }) => textHash === sha256(base64))) return
+  const list = { fileName: 'entries.csv', base64, choices: NOTHING_SAID, answers: [] }
   const ask = (body: { readonly dryRun: boolean; readonly planHash: string }) =>
     importEntryList({ params: { event: seeded.eventId }, query: {}, body: { ...list, ...body } }, organiserOf(database, seeded), {
       database,

@@ -3,16 +3,10 @@ import { and, eq } from 'drizzle-orm'
 import type { Db } from '@/db/client'
 import { car, entry, entryPerson, person, record, runGroup } from '@/db/schema'
 import { subjectKey } from '@/lib/inspection/subject'
-import type { ExistingEntry } from '../plan-import'
+import type { ExistingEntry, ExistingPerson } from '../plan-import'
 
-/** What an entry's rows are called in the database, for a change. */
-export interface ExistingEntryRow extends ExistingEntry {
-  readonly carId: string
-  readonly personId: string | null
-}
-
-/** The event's entries as an import compares them, in no order. */
-export function existingEntries(database: Db, eventId: string): readonly ExistingEntryRow[] {
+/** The event's entries as an import compares them, by their code. */
+export function existingEntries(database: Db, eventId: string): readonly ExistingEntry[] {
   const looked = new Set(
     database
       .selectDistinct({ key: record.subjectKey })
@@ -21,46 +15,50 @@ export function existingEntries(database: Db, eventId: string): readonly Existin
       .all()
       .map((row) => row.key),
   )
-  const drivers = new Map(
-    database
-      .select({ entryId: entryPerson.entryId, person })
-      .from(entryPerson)
-      .innerJoin(person, eq(person.id, entryPerson.personId))
-      .where(and(eq(person.eventId, eventId), eq(entryPerson.role, 'driver')))
-      .all()
-      // The first driver is the one the list named; later ones were added here.
-      .reverse()
-      .map((row) => [row.entryId, row.person]),
-  )
+  const people = peopleByEntry(database, eventId)
   return database
     .select({ entry, car, group: runGroup.name })
     .from(entry)
     .innerJoin(car, eq(car.id, entry.carId))
     .innerJoin(runGroup, eq(runGroup.id, entry.groupId))
     .where(eq(entry.eventId, eventId))
+    .orderBy(entry.code)
     .all()
-    .map((row) => toExisting(row, drivers.get(row.entry.id) ?? null, looked))
+    .map(({ entry: { id, number, plate, passengerSeats, note }, car: { model, colour }, group }) => ({
+      id,
+      number,
+      plate,
+      model,
+      colour,
+      group,
+      passengerSeats,
+      note,
+      people: people.get(id) ?? [],
+      hasRecords: looked.has(subjectKey({ car: id })),
+    }))
 }
 
-function toExisting(
-  row: { entry: typeof entry.$inferSelect; car: typeof car.$inferSelect; group: string },
-  driver: typeof person.$inferSelect | null,
-  looked: ReadonlySet<string>,
-): ExistingEntryRow {
-  return {
-    id: row.entry.id,
-    carId: row.car.id,
-    personId: driver?.id ?? null,
-    number: row.entry.number,
-    plate: row.entry.plate,
-    model: row.car.model,
-    colour: row.car.colour,
-    group: row.group,
-    passengerSeats: row.entry.passengerSeats,
-    note: row.entry.note,
-    name: driver?.name ?? '',
-    email: driver?.email ?? '',
-    mobile: driver?.mobile ?? '',
-    hasRecords: looked.has(subjectKey({ car: row.entry.id })),
+function peopleByEntry(database: Db, eventId: string): ReadonlyMap<string, ExistingPerson[]> {
+  const rows = database
+    .select({
+      entryId: entryPerson.entryId,
+      role: entryPerson.role,
+      id: person.id,
+      name: person.name,
+      email: person.email,
+      mobile: person.mobile,
+    })
+    .from(entryPerson)
+    .innerJoin(person, eq(person.id, entryPerson.personId))
+    .innerJoin(entry, and(eq(entry.id, entryPerson.entryId), eq(entry.eventId, eventId)))
+    // Ids sort by when they were made: the first driver is the one the list named.
+    .orderBy(person.id)
+    .all()
+  const people = new Map<string, ExistingPerson[]>()
+  for (const { entryId, id, name, email, mobile, role } of rows) {
+    const own = people.get(entryId) ?? []
+    own.push({ id, name, email: email ?? '', mobile: mobile ?? '', role })
+    people.set(entryId, own)
   }
+  return people
 }

@@ -4,53 +4,55 @@ import Link from 'next/link'
 import { Button, buttonClass } from '@/app/_ui/button'
 import { EmptyState } from '@/app/_ui/empty-state'
 import { Notice } from '@/app/_ui/notice'
+import { Progress } from '@/app/_ui/progress'
 import { ChooseFile } from './choose-file'
 import { ImportPlan } from './import-plan'
-import { type ImportStage, sizeInWords, useImport } from './use-import'
+import { entriesInWords, type ImportStage } from './import-words'
+import { sizeInWords } from './read-file'
+import { useImport } from './use-import'
 
-/** Choose a list, see what it would do, import it. Nothing is written before the last press. */
+/** Choose a list, say what only you know about it, see what it would do, import it. Nothing is written before the last press. */
 export function ImportScreen({ eventId }: { readonly eventId: string }) {
-  const { stage, choose, look, commit } = useImport(eventId)
+  const desk = useImport(eventId)
+  const { stage } = desk
+  const lookAgain = <Button onClick={desk.again}>Look it through again</Button>
   return (
-    <div className="grid max-w-[960px] gap-6">
-      <ChooseFile isAnother={stage.at !== 'nothing'} onChoose={(file) => void choose(file)} />
+    <div className="grid max-w-[1080px] gap-6">
+      <ChooseFile isAnother={stage.at !== 'nothing'} onChoose={(file) => void desk.choose(file)} />
       <p role="status" className={stage.at === 'looking' || stage.at === 'importing' ? '' : 'sr-only'}>
         {announcement(stage)}
       </p>
       {stage.at === 'nothing' && (
         <EmptyState title="No list chosen">
-          A CSV file with a line of headings. It must name the entry number, surname, car, plate and run group; first name, e-mail, mobile,
-          colour, passengers and notes are taken where they stand. You see what would happen before anything is written.
+          A CSV file as your spreadsheet saves it: comma, semicolon or tab, in any writing. It must name the entry number, the driver, the
+          car, the plate and the run group; e-mail, mobile, colour, passengers, role, second driver, team and notes are taken where they
+          stand. What is not sure is asked, and you see what would happen before anything is written.
         </EmptyState>
+      )}
+      {stage.at === 'reading' && (
+        <Progress
+          label={`Reading ${stage.fileName}`}
+          done={Math.round(stage.done / 1_000)}
+          total={Math.round(stage.total / 1_000)}
+          unit="KB"
+        />
       )}
       {stage.at === 'unreadable' && (
         <Notice happened={`${stage.fileName} cannot be read. ${stage.why}`} kept="Nothing was imported." todo={stage.todo} />
       )}
       {stage.at === 'refused' && (
+        <Notice happened={stage.problem.what} kept="Nothing was imported." todo={stage.problem.todo} actions={lookAgain} />
+      )}
+      {stage.at === 'looked' && stage.problem !== null && (
         <Notice
           happened={stage.problem.what}
-          kept="Nothing was imported."
+          kept={`${stage.problem.kept} What you answered is still here.`}
           todo={stage.problem.todo}
-          actions={<Button onClick={() => void look(stage.list)}>Look it through again</Button>}
+          actions={lookAgain}
         />
       )}
-      {(stage.at === 'looked' || stage.at === 'importing') && (
-        <>
-          {stage.at === 'looked' && stage.problem !== null && (
-            <Notice
-              happened={stage.problem.what}
-              kept={stage.problem.kept}
-              todo={stage.problem.todo}
-              actions={<Button onClick={() => void look(stage.list)}>Look it through again</Button>}
-            />
-          )}
-          <ImportPlan
-            list={stage.list}
-            plan={stage.plan}
-            isBusy={stage.at === 'importing'}
-            onCommit={() => void commit(stage.list, stage.plan)}
-          />
-        </>
+      {(stage.at === 'looked' || stage.at === 'importing' || (stage.at === 'looking' && stage.plan !== null)) && stage.plan !== null && (
+        <ImportPlan desk={desk} list={stage.list} plan={stage.plan} isBusy={stage.at !== 'looked'} />
       )}
       {stage.at === 'done' && <Done eventId={eventId} stage={stage} />}
     </div>
@@ -62,7 +64,7 @@ function Done({ eventId, stage: { list, answer } }: { readonly eventId: string; 
   return (
     <Notice
       weight="news"
-      happened={`${list.fileName} is imported: ${entries(added)} added, ${changed} changed, ${unchanged} as they were.`}
+      happened={`${list.fileName} is imported: ${entriesInWords(added)} added, ${changed} changed, ${unchanged} as they were.`}
       kept="Importing the same list again changes nothing."
       todo="Crew devices get the entries with their next pull."
       actions={
@@ -84,16 +86,23 @@ function announcement(stage: ImportStage): string {
     case 'looking':
       return `Looking through ${stage.list.fileName}, ${sizeInWords(stage.list.bytes)}`
     case 'looked':
-      return stage.plan.problemCount > 0
-        ? `Looked through. ${stage.plan.problemCount} problems; nothing can be imported yet.`
-        : `Looked through. ${entries(stage.plan.added)} would be added, ${stage.plan.changed} changed.`
+      return lookedWords(stage.plan)
     case 'importing':
-      return `Importing ${entries(stage.plan.added + stage.plan.changed)}`
+      return `Importing ${entriesInWords(stage.plan.added + stage.plan.changed)}`
     default:
       return ''
   }
 }
 
-export function entries(count: number): string {
-  return count === 1 ? '1 entry' : `${count} entries`
+function lookedWords({
+  problemCount,
+  openQuestions,
+  columnsNeeded,
+  added,
+  changed,
+}: Extract<ImportStage, { at: 'looked' }>['plan']): string {
+  if (columnsNeeded) return 'Looked through. Say what the columns are.'
+  if (problemCount > 0 || openQuestions > 0)
+    return `Looked through. ${problemCount} problems and ${openQuestions} open questions; nothing can be imported yet.`
+  return `Looked through. ${entriesInWords(added)} would be added, ${changed} changed.`
 }
