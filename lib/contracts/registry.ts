@@ -5,6 +5,7 @@ import { openEntryLink } from './entry-link'
 import { eventDeclarations } from './event-declarations'
 import { enrolDevice, listDevices, retireDevice } from './devices'
 import { entryImport } from './entry-import'
+import { holds } from './holds'
 import { join, joinState, makeJoinCode, seeJoinCode } from './join'
 import { live } from './live'
 import { me } from './me'
@@ -16,6 +17,7 @@ import { signIn } from './sign-in'
 import { signOut } from './sign-out'
 import { syncPull } from './sync-pull'
 import { syncPush } from './sync-push'
+import { voidPass } from './void-pass'
 
 /** Every contract there is. A route whose contract is not in this list fails the architecture test. */
 export const CONTRACTS: readonly Contract[] = [
@@ -47,4 +49,6 @@ export const CONTRACTS: readonly Contract[] = [
   addKit,
   keepKit,
   eventDeclarations,
+  holds,
+  voidPass,
 ]

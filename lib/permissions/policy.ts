@@ -17,6 +17,7 @@ export const POLICY = {
   'entry:own': ['entrant'],
   'entries:import': ['admin', 'organiser'],
   'entries:see': ['admin', 'organiser', 'chief'],
+  'holds:see': ['admin', 'organiser', 'chief'],
   'board:see': ['admin', 'organiser', 'chief', 'scrutineer', 'helper', 'sign-on', 'marshal'],
   'crew:accept': ['admin', 'organiser'],
   'crew:see': ['admin', 'organiser', 'chief'],

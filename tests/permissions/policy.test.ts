@@ -10,6 +10,7 @@ const MATRIX: Readonly<Record<Action, string>> = {
   'garage:keep': '          no    no        no    no         no     no      no      yes',
   'entries:import': '       yes   yes       no    no         no     no      no      no',
   'entries:see': '          yes   yes       yes   no         no     no      no      no',
+  'holds:see': '            yes   yes       yes   no         no     no      no      no',
   'board:see': '            yes   yes       yes   yes        yes    yes     yes     no',
   'crew:accept': '          yes   yes       no    no         no     no      no      no',
   'crew:see': '             yes   yes       yes   no         no     no      no      no',

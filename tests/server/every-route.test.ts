@@ -116,6 +116,8 @@ const MAY: Readonly<Record<string, readonly Role[]>> = {
   'kit-add': ['entrant'],
   'kit-keep': ['entrant'],
   'event-declarations': ['admin', 'organiser', 'chief'],
+  holds: ['admin', 'organiser', 'chief'],
+  'pass-void': ['organiser', 'chief'],
   board: ['admin', 'organiser', 'chief', 'scrutineer', 'helper', 'sign-on', 'marshal'],
 }
 

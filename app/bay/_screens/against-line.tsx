@@ -13,7 +13,7 @@ import { isKnown } from '@/lib/inspection/record'
 import type { Against } from '@/lib/inspection/stands-against'
 import { can } from '@/lib/permissions/policy'
 import { triggerWords } from '@/lib/pass/trigger-words'
-import { againstWords } from './against-words'
+import { wordsHere } from './words-here'
 import type { Walk } from './use-walk'
 import { WidenSheet } from './widen-sheet'
 
@@ -28,7 +28,7 @@ interface AgainstLineProps {
 export function AgainstLine({ against, walk, isByClock }: AgainstLineProps) {
   const day = useDay()
   const [isWidening, setWidening] = useState(false)
-  const words = againstWords(day, against, walk)
+  const words = wordsHere(day, against, walk)
   const { block, record, kind } = against
   const onlyChief = block?.onlyChiefLifts === true
   return (

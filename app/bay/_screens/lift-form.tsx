@@ -11,7 +11,7 @@ import { TextField } from '@/app/_ui/field'
 import type { Against } from '@/lib/inspection/stands-against'
 import { isKnown } from '@/lib/inspection/record'
 import type { Draft } from '@/lib/sync/client/draft'
-import { againstWords } from './against-words'
+import { wordsHere } from './words-here'
 import type { Walk } from './use-walk'
 
 interface LiftFormProps {
@@ -60,7 +60,7 @@ export function LiftForm({ walk, against }: LiftFormProps) {
               checked={!left.includes(one.hash)}
               onChange={() => setLeft(left.includes(one.hash) ? left.filter((hash) => hash !== one.hash) : [...left, one.hash])}
             >
-              {againstWords(day, one, walk).what}
+              {wordsHere(day, one, walk).what}
             </Choice>
           ))}
         </fieldset>

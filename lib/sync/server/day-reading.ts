@@ -20,6 +20,8 @@ export interface DayReading {
   readonly stateOf: (key: SubjectKey) => SubjectState
   /** Records of the subject whose permission was taken away and that nobody adopted. */
   readonly setAsideOf: (key: SubjectKey) => readonly LogEntry[]
+  /** Records of the subject and of the event itself. */
+  readonly recordsOf: (key: SubjectKey) => readonly LogEntry[]
   /** An entry as the records about it leave it; null for one of another event. */
   readonly entryNow: (entryId: string) => ChangeableEntry | null
   readonly bookOf: (checklistHash: string, limitsHash: string) => Book | null
@@ -41,6 +43,7 @@ export function dayReading(database: Db, eventId: string, now: number): DayReadi
     day: context.day,
     stateOf: (key) => stateOf(key, frame, log, context),
     setAsideOf: (key) => setAsideIn(log.bySubject.get(key) ?? NONE),
+    recordsOf: (key) => recordsOf(key, eventId, log),
     entryNow: (entryId) => entryAsRecorded(entryId, frame, log),
     bookOf: (checklistHash, limitsHash) => pinnedBook(database, checklistHash, limitsHash),
   }
@@ -59,6 +62,12 @@ function setAsideIn(entries: readonly LogEntry[]): readonly LogEntry[] {
     ),
   )
   return entries.filter(({ hash, disposition }) => disposition.state === 'quarantined' && !adopted.has(hash))
+}
+
+function recordsOf(key: SubjectKey, eventId: string, log: EventLog): readonly LogEntry[] {
+  const ofEvent = subjectKey({ event: eventId })
+  const own = log.bySubject.get(key) ?? NONE
+  return key === ofEvent ? own : [...own, ...(log.bySubject.get(ofEvent) ?? NONE)]
 }
 
 function entryAsRecorded(entryId: string, frame: EventFrame, log: EventLog): ChangeableEntry | null {

@@ -1,6 +1,7 @@
 import type { Metadata } from 'next'
 import { notFound } from 'next/navigation'
 import { readBoard } from '@/lib/board/queries/see-board'
+import { can } from '@/lib/permissions/policy'
 import { now } from '@/lib/platform/clock'
 import { servedDatabase } from '@/lib/platform/served-database'
 import { dayReading } from '@/lib/sync/server/day-reading'
@@ -16,7 +17,7 @@ export default async function BoardPage({ params }: { readonly params: Promise<{
   if (board === null) notFound()
   return (
     <EventFrame guarded={guarded} tab="board" width="full">
-      <BoardScreen eventId={guarded.event.id} first={board} />
+      <BoardScreen eventId={guarded.event.id} first={board} seesHolds={can(guarded.roles, 'holds:see')} />
     </EventFrame>
   )
 }

@@ -10,8 +10,15 @@ import { BoardGroupList } from './board-group-list'
 import { ConnectionLine } from './connection-line'
 import { NeedsColumn } from './needs-column'
 
+interface BoardScreenProps {
+  readonly eventId: string
+  readonly first: Board
+  /** Whether who looks may open the list of holds. */
+  readonly seesHolds?: boolean
+}
+
 /** The board: how every entry stands, by run group, and beside it who needs somebody. */
-export function BoardScreen({ eventId, first }: { readonly eventId: string; readonly first: Board }) {
+export function BoardScreen({ eventId, first, seesHolds = false }: BoardScreenProps) {
   const { board, connection } = useBoard(eventId, first)
   const [filter, setFilter] = useState(EVERYTHING)
   const rows = filterRows(board.rows, filter)
@@ -27,7 +34,11 @@ export function BoardScreen({ eventId, first }: { readonly eventId: string; read
         <ConnectionLine connection={connection} board={board} />
         <BoardFilterBar filter={filter} onChange={setFilter} rows={board.rows} shown={rows.length} />
       </div>
-      <NeedsColumn rows={board.rows} className="xl:sticky xl:top-4 xl:col-start-2 xl:row-span-2 xl:row-start-1 xl:self-start" />
+      <NeedsColumn
+        rows={board.rows}
+        holdsPath={seesHolds ? `/events/${eventId}/holds` : null}
+        className="xl:sticky xl:top-4 xl:col-start-2 xl:row-span-2 xl:row-start-1 xl:self-start"
+      />
       <div className="grid min-w-0 content-start gap-8">
         {board.groups.map((group) => (
           <BoardGroupList key={group.id} group={group} rows={rows.filter((row) => row.group === group.id)} board={board} />

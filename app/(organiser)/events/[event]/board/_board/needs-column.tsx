@@ -1,8 +1,10 @@
 'use client'
 
 import { useState } from 'react'
+import Link from 'next/link'
 import { Button } from '@/app/_ui/button'
 import { classNames } from '@/app/_ui/class-names'
+import { HardLink } from '@/app/_ui/hard-link'
 import { NumberPlate } from '@/app/_ui/number-plate'
 import { OutcomeShape, type OutcomeState } from '@/app/_ui/outcome-shape'
 import { compareNumbers } from '@/lib/board/compare-numbers'
@@ -11,8 +13,15 @@ import { type BoardRow, NEED_KINDS } from '@/lib/contracts/board'
 /** On a phone the groups stand below this list, so it shows only so many until asked for all. */
 const FIRST = 5
 
+interface NeedsColumnProps {
+  readonly rows: readonly BoardRow[]
+  /** The page of the holds; null for who may not open it. */
+  readonly holdsPath: string | null
+  readonly className?: string
+}
+
 /** Who needs somebody, and for what; the most pressing on top. Whatever the board is searched for, all of them stay. */
-export function NeedsColumn({ rows, className }: { readonly rows: readonly BoardRow[]; readonly className?: string }) {
+export function NeedsColumn({ rows, holdsPath, className }: NeedsColumnProps) {
   const [all, setAll] = useState(false)
   const needing = rows
     .filter(({ needs }) => needs.length > 0)
@@ -39,6 +48,16 @@ export function NeedsColumn({ rows, className }: { readonly rows: readonly Board
                     {words}
                   </li>
                 ))}
+                <li className="flex flex-wrap gap-x-4">
+                  <HardLink href={`/bay/car/${row.id}`} className={LINK}>
+                    Open in the bay
+                  </HardLink>
+                  {holdsPath !== null && row.needs.some(({ kind }) => IN_HOLDS.includes(kind)) && (
+                    <Link href={holdsPath} className={LINK}>
+                      {row.needs.some(({ kind }) => kind === 'two-passes') ? 'Void one' : 'Holds'}
+                    </Link>
+                  )}
+                </li>
               </ul>
             </li>
           ))}
@@ -52,6 +71,10 @@ export function NeedsColumn({ rows, className }: { readonly rows: readonly Board
     </aside>
   )
 }
+
+const LINK = 'target inline-flex items-center text-accent underline underline-offset-4'
+/** What the page of the holds tells more of, or does something about. */
+const IN_HOLDS: readonly string[] = ['held', 'person', 'two-passes']
 
 /** What asks for a person has the shape that says so. */
 const SHAPES: Readonly<Record<BoardRow['needs'][number]['kind'], OutcomeState>> = {
