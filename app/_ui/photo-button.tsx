@@ -1,13 +1,14 @@
 'use client'
 
 import { type ChangeEvent, useId } from 'react'
-import { buttonClass, type ButtonLook } from './button'
+import { buttonClass, type ButtonLook, type ButtonSize } from './button'
 import { classNames } from './class-names'
 
 export interface PhotoButtonProps {
   /** What it does, in words: “Take a photograph”. */
   readonly label: string
   readonly look?: ButtonLook
+  readonly size?: ButtonSize
   /** A phone opens its camera at once; otherwise it also offers what it has. */
   readonly fromCamera?: boolean
   readonly isBusy?: boolean
@@ -18,7 +19,7 @@ export interface PhotoButtonProps {
 }
 
 /** A button that asks for a photograph. The same picture may be given again after it was taken away. */
-export function PhotoButton({ label, look = 'secondary', fromCamera = false, isBusy = false, ...rest }: PhotoButtonProps) {
+export function PhotoButton({ label, look = 'secondary', size = 'normal', fromCamera = false, isBusy = false, ...rest }: PhotoButtonProps) {
   const { disabled = false, describedBy, onPhoto, className } = rest
   const id = useId()
   const isOff = disabled || isBusy
@@ -34,7 +35,7 @@ export function PhotoButton({ label, look = 'secondary', fromCamera = false, isB
       data-slot="photo-button"
       aria-busy={isBusy || undefined}
       className={classNames(
-        buttonClass(look),
+        buttonClass(look, size),
         'relative',
         isOff
           ? 'cursor-not-allowed border-dashed border-muted bg-ground text-muted'

@@ -12,11 +12,13 @@ export interface PhotoThumbProps {
   readonly words: string
   /** Why there is no picture, where there is none. */
   readonly missing?: string
+  /** Takes it away again; offered beside the large picture. */
+  readonly onRemove?: () => void
   readonly className?: string
 }
 
 /** A small photograph; pressed, it is shown large. One that cannot be had says so in words. */
-export function PhotoThumb({ src, words, missing = 'Photograph not to be had here', className }: PhotoThumbProps) {
+export function PhotoThumb({ src, words, missing = 'Photograph not to be had here', onRemove, className }: PhotoThumbProps) {
   const [isOpen, setOpen] = useState(false)
   const [broken, setBroken] = useState<string | null>(null)
   const size = classNames('size-24 shrink-0 overflow-hidden rounded-sm border-2 border-line bg-surface', className)
@@ -32,7 +34,21 @@ export function PhotoThumb({ src, words, missing = 'Photograph not to be had her
       <button data-slot="photo-thumb" type="button" className={size} aria-label={`Photograph: ${words}`} onClick={() => setOpen(true)}>
         <Picture src={src} words="" className="size-full object-cover" onBroken={() => setBroken(src)} />
       </button>
-      <Dialog isOpen={isOpen} onClose={() => setOpen(false)} title={words} actions={<Button onClick={() => setOpen(false)}>Close</Button>}>
+      <Dialog
+        isOpen={isOpen}
+        onClose={() => setOpen(false)}
+        title={words}
+        actions={
+          <>
+            <Button onClick={() => setOpen(false)}>Close</Button>
+            {onRemove && (
+              <Button look="secondary" onClick={onRemove}>
+                Take it away
+              </Button>
+            )}
+          </>
+        }
+      >
         <Picture src={src} words={words} className="max-h-[70dvh] w-full object-contain" onBroken={() => setBroken(src)} />
       </Dialog>
     </>

@@ -22,7 +22,7 @@ export type AnswerRefusal = { readonly refused: 'value-missing' | 'milder-than-r
 
 /** The finding's own fields, ready for `DayClient.record`; basis, answers and envelope are filled in there. */
 export type FindingDraft = Pick<Finding, 'kind' | 'subject' | 'check' | 'outcome'> &
-  Partial<Pick<Finding, 'reason' | 'measured' | 'found' | 'judgement' | 'paramsHash' | 'notes'>>
+  Partial<Pick<Finding, 'reason' | 'measured' | 'found' | 'judgement' | 'paramsHash' | 'notes' | 'photos'>>
 
 const SEVERITY = { ok: 0, advisory: 1, fail: 2 } as const
 

@@ -15,6 +15,8 @@ export interface LeftAt {
   readonly typed: Readonly<Record<string, string>>
   /** Kept too: a repair that a reload forgot would be recorded as if nothing had been wrong. */
   readonly mending: Mending | null
+  /** Hashes of the photographs taken for the answer; the pictures lie in the device's own store. */
+  readonly photos: readonly string[]
   /** Device clock, ms. */
   readonly at: number
 }
@@ -37,7 +39,9 @@ export function rememberWalk(store: TextStore, subject: string, left: LeftAt): v
 /** Where the walk of a subject was left; null when it never was, or the memory cannot be read. */
 export function recallWalk(store: TextStore, subject: string): LeftAt | null {
   const left = attempt<unknown>(() => JSON.parse(store.getItem(keyOf(subject)) ?? 'null'), null)
-  return isLeftAt(left) ? left : null
+  // What an older build remembered knows of no photographs.
+  const whole = isObject(left) ? { photos: [], ...left } : left
+  return isLeftAt(whole) ? whole : null
 }
 
 /** Forgets it, when the walk is done. */
@@ -56,8 +60,9 @@ function attempt<T>(work: () => T, otherwise: T): T {
 
 function isLeftAt(value: unknown): value is LeftAt {
   if (!isObject(value)) return false
-  const { place, check, typed, mending, at } = value
-  return isText(place) && (check === null || isText(check)) && isTyped(typed) && (mending === null || isMending(mending)) && isTime(at)
+  const { place, check, typed, mending, photos, at } = value
+  const isAnswer = isTyped(typed) && (mending === null || isMending(mending)) && Array.isArray(photos) && photos.every(isText)
+  return isText(place) && (check === null || isText(check)) && isAnswer && isTime(at)
 }
 
 function isMending(value: unknown): boolean {

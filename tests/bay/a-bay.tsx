@@ -6,6 +6,8 @@ import { eq } from 'drizzle-orm'
 import { vi } from 'vitest'
 import { DayProvider } from '@/app/_crew/day-context'
 import { BayScreens } from '@/app/bay/_screens/bay-app'
+// Fetched when needed by the screens; here before any test counts its time.
+import '@/app/bay/_screens/car-screen'
 import * as tables from '@/db/schema'
 import { hashJson } from '@/lib/checklist/hash'
 import type { RecordOf } from '@/lib/inspection/record'

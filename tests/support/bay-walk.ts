@@ -12,6 +12,7 @@ interface Check {
   readonly id: string
   readonly prompt: string
   readonly measure?: readonly Measure[]
+  readonly photo?: 'on-fail' | 'always'
   readonly reasons: readonly { readonly id: string; readonly text: string }[]
 }
 interface Fact {
@@ -118,7 +119,10 @@ export function fails(reason: string, values: Values = {}, look: (page: Page) =>
     await measure(page, check, values)
     await look(page)
     await page.getByRole('button', { name: 'Not so' }).click()
-    await moved(page, () => giveReason(page, check, reason))
+    await moved(page, async () => {
+      await giveReason(page, check, reason)
+      if (check?.photo !== undefined) await page.getByRole('button', { name: 'No photograph can be taken' }).click()
+    })
     return 1
   }
 }

@@ -6,6 +6,7 @@ const left: LeftAt = {
   check: 'wheels.tread',
   typed: { depthMm: '1,2' },
   mending: { typed: { depthMm: '0,8' }, reason: 'worn', note: 'swapped' },
+  photos: ['a'.repeat(64)],
   at: 1_000,
 }
 
@@ -30,6 +31,13 @@ const broken: TextStore = {
     throw new Error('closed to us')
   },
 }
+
+test('what an older build remembered, which knew no photographs, is still understood', () => {
+  const store = aStore()
+  const { photos: _, ...older } = left
+  store.setItem('lockwire.walk.car:e', JSON.stringify(older))
+  expect(recallWalk(store, 'car:e')).toEqual({ ...left, photos: [] })
+})
 
 test('a walk is remembered at its very check, with what was typed and what was being put right', () => {
   const store = aStore()

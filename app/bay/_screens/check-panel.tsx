@@ -1,9 +1,12 @@
 'use client'
 
+import { useTaking } from '@/app/_crew/use-taking'
 import { AnswerButtons } from './answer-buttons'
+import { CheckPhotos } from './check-photos'
 import { JudgementLine } from './judgement-line'
 import { MeasureFields } from './measure-fields'
 import { MendedButtons } from './mended-buttons'
+import { PhotoSheet } from './photo-sheet'
 import { ReasonSheet } from './reason-sheet'
 import { useCheck, type CheckInput } from './use-check'
 
@@ -13,7 +16,10 @@ const SHEET_TITLES = { fail: 'What is not so?', advisory: 'What should the drive
 export function CheckPanel({ busy, ...input }: CheckInput & { readonly busy: boolean }) {
   const now = useCheck(input)
   const { check } = input.item
-  const { typed, mending } = input.entered
+  const { typed, mending, photos } = input.entered
+  const taking = useTaking()
+  const isBusy = busy || taking.busy
+  const setPhotos = (next: readonly string[]) => input.setEntered({ typed, mending, photos: next })
   return (
     <section className="flex grow flex-col" aria-labelledby="check-prompt">
       <h3 id="check-prompt" className="mt-2 text-xl">
@@ -31,7 +37,7 @@ export function CheckPanel({ busy, ...input }: CheckInput & { readonly busy: boo
           key={mending ? 'anew' : 'met'}
           fields={check.measure}
           typed={typed}
-          onTyped={(next) => input.setEntered({ typed: next, mending })}
+          onTyped={(next) => input.setEntered({ typed: next, mending, photos })}
           problems={now.problems}
           judgement={now.judgement}
           source={check.source}
@@ -39,7 +45,19 @@ export function CheckPanel({ busy, ...input }: CheckInput & { readonly busy: boo
       ) : (
         <JudgementLine judgement={now.judgement} source={check.source} />
       )}
-      {mending ? <MendedButtons now={now} busy={busy} /> : <AnswerButtons now={now} busy={busy} />}
+      <CheckPhotos
+        words={check.short}
+        photos={photos}
+        taking={taking}
+        disabled={busy}
+        onPhotos={setPhotos}
+        onRemove={(hash) => {
+          setPhotos(photos.filter((one) => one !== hash))
+          taking.drop(hash)
+        }}
+      />
+      {mending ? <MendedButtons now={now} busy={isBusy} /> : <AnswerButtons now={now} busy={isBusy} />}
+      {now.photoAsked && <PhotoSheet short={check.short} taking={taking} {...now.photoAsked} />}
       {now.asking && (
         <ReasonSheet
           check={check}

@@ -1,6 +1,7 @@
 'use client'
 
 import { useDay } from '@/app/_crew/day-context'
+import { KeptPhotos } from '@/app/_crew/kept-photos'
 import { clockTime } from '@/app/_crew/say-when'
 import { OutcomeShape } from '@/app/_ui/outcome-shape'
 import type { Head } from '@/lib/inspection/state'
@@ -42,6 +43,7 @@ function HeadLine({ head, item }: { readonly head: Head; readonly item: WalkItem
         {grounds === '' ? '' : `: ${grounds}`}
         {head.lapsed ? ' (of another day: see it today)' : ''}
         {head.quarantined ? ' (without the right to say so)' : ''}
+        <KeptPhotos record={head.record} words={`${item.check.short}, ${HEAD_WORDS[head.outcome]}`} />
       </span>
     </li>
   )

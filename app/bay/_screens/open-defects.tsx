@@ -1,6 +1,7 @@
 'use client'
 
 import { useDay } from '@/app/_crew/day-context'
+import { KeptPhotos } from '@/app/_crew/kept-photos'
 import { OutcomeShape } from '@/app/_ui/outcome-shape'
 import type { WalkItem, WalkPlace } from '@/lib/walk/walk-plan'
 import { headWords } from './head-words'
@@ -61,6 +62,7 @@ function DefectLine({ place, item, onPick }: DefectLineProps) {
           <span className="block">{words || (state?.standing === 'could-not-see' ? 'could not see' : check.prompt)}</span>
         </span>
       </button>
+      {head && <KeptPhotos record={head.record} words={`${check.short}, ${head.outcome}`} />}
     </li>
   )
 }

@@ -9,6 +9,6 @@ export function openStop(subject: WalkSubject, base: string, stop: WalkStop): vo
   const key = subjectKey(subject)
   const left = recallWalk(localStorage, key)
   if (left?.place !== stop.place || left.check !== stop.check)
-    rememberWalk(localStorage, key, { ...stop, typed: {}, mending: null, at: Date.now() })
+    rememberWalk(localStorage, key, { ...stop, typed: {}, mending: null, photos: [], at: Date.now() })
   goTo(`${base}/${stop.place}`)
 }

@@ -47,7 +47,7 @@ export function PlaceScreen({ walk, here, base, undo }: PlaceScreenProps) {
             entered={now.entered}
             setEntered={now.setEntered}
             busy={now.busy}
-            onAnswer={(given, note) => now.answer(item, given, note)}
+            onAnswer={(given, note, photos) => now.answer(item, given, note, photos)}
           />
         </>
       ) : (

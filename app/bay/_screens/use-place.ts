@@ -22,7 +22,7 @@ export interface PlaceNow extends Position {
   readonly item: WalkItem | null
   readonly busy: boolean
   readonly problem: DayProblem | null
-  readonly answer: (item: WalkItem, answer: Answer, note: string) => void
+  readonly answer: (item: WalkItem, answer: Answer, note: string, photos: readonly string[]) => void
   readonly close: () => void
   readonly takeBack: () => void
 }
@@ -56,10 +56,15 @@ export function usePlace(walk: Walk, here: WalkPlace, base: string, undo: Undo):
     show(stopAfter(walkOf(day, subject).plan, stop))
   }
 
-  const answer = (item: WalkItem, given: Answer, note: string) => {
+  const answer = (item: WalkItem, given: Answer, note: string, photos: readonly string[]) => {
     const made = draft(item, given, note === '' ? undefined : 'note:words')
     if (isRefusal(made)) setProblem(refusalWords(made))
-    else void save([made], note, `${item.check.short}: ${OUTCOME_WORDS[made.outcome]}`)
+    else
+      void save(
+        [photos.length === 0 ? made : { ...made, photos: [...photos] }],
+        note,
+        `${item.check.short}: ${OUTCOME_WORDS[made.outcome]}`,
+      )
   }
 
   const close = () => {

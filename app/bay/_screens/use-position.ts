@@ -11,6 +11,8 @@ export interface Entered {
   readonly typed: Typed
   /** What was put right here and has still to be looked at again; null when nothing was. */
   readonly mending: Mending | null
+  /** Hashes of the photographs that go with the answer. */
+  readonly photos: readonly string[]
 }
 
 export interface Position {
@@ -22,7 +24,7 @@ export interface Position {
   readonly awayMs: number | null
 }
 
-const NOTHING: Entered = { typed: {}, mending: null }
+const NOTHING: Entered = { typed: {}, mending: null, photos: [] }
 
 /** Which check of a place is asked and what has been entered there, kept over a reload, a call and a dead battery. */
 export function usePosition(here: WalkPlace, key: string): Position {
@@ -44,8 +46,8 @@ function openAt(here: WalkPlace, key: string): Pick<Position, 'stop' | 'entered'
   const left = recallWalk(localStorage, key)
   const isHere = (check: string | null) => check === null || [...here.oneByOne, ...here.together].some((item) => item.check.id === check)
   if (left?.place === here.place.id && isHere(left.check)) {
-    const { place, check, typed, mending, at } = left
-    return { stop: { place, check }, entered: { typed, mending }, awayMs: Date.now() - at }
+    const { place, check, typed, mending, photos, at } = left
+    return { stop: { place, check }, entered: { typed, mending, photos }, awayMs: Date.now() - at }
   }
   const first = nextStop([here], null) ?? { place: here.place.id, check: here.oneByOne[0]?.check.id ?? null }
   return { stop: first, entered: NOTHING, awayMs: null }
