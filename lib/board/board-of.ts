@@ -4,6 +4,7 @@ import type { SubjectState } from '@/lib/inspection/state'
 import { subjectKey } from '@/lib/inspection/subject'
 import { wireSentence, wireStations } from '@/lib/inspection/wire'
 import { compareNumbers } from './compare-numbers'
+import { firstSessionOn, forecastOf, morningOf, type TimetableLine } from './forecast-of'
 import type { DayReading } from './day-reading'
 import { needsOfCar, needsOfPerson } from './needs-of'
 
@@ -25,9 +26,12 @@ export interface EventFacts {
   readonly checklistHash: string
   readonly limitsHash: string
   /** In their running order. */
-  readonly groups: readonly Pick<BoardGroup, 'id' | 'name' | 'firstSessionAt'>[]
+  readonly groups: readonly Pick<BoardGroup, 'id' | 'name'>[]
+  readonly timetable: readonly TimetableLine[]
   readonly entries: readonly EntryFacts[]
 }
+
+const NOTHING_TO_SAY = { is: 'too early to say', lastAt: null, toGo: 0 } as const
 
 /** The board: how every entry stands by this reading of the log, grouped and sorted by number. */
 export function boardOf(event: EventFacts, reading: DayReading, at: number): Board {
@@ -38,13 +42,22 @@ export function boardOf(event: EventFacts, reading: DayReading, at: number): Boa
   const rows = event.entries
     .map((entry) => rowOf(entry, reading, book))
     .toSorted((a, b) => place(a) - place(b) || compareNumbers(a.number, b.number))
+  const groups = event.groups.map((group) => ({
+    ...group,
+    firstSessionAt: firstSessionOn(reading.day, group.id, event.timetable),
+    ...countsOf(rows.filter((row) => row.group === group.id)),
+  }))
+  const mornings = rows
+    .filter(({ verdict }) => verdict !== 'withdrawn')
+    .map(({ id, group }) => morningOf(reading.stateOf(subjectKey({ car: id })), group, reading.day))
+  const forecasts = forecastOf(groups, mornings, event.timetable, at)
   return {
     at,
     seq: reading.seq,
     day: reading.day,
     timeZone: event.timeZone,
     stations: stations.map(({ id, title, short }) => ({ station: id, title, short })),
-    groups: event.groups.map((group) => ({ ...group, ...countsOf(rows.filter((row) => row.group === group.id)) })),
+    groups: groups.map((group) => ({ ...group, forecast: forecasts.get(group.id) ?? NOTHING_TO_SAY })),
     rows,
   }
 }

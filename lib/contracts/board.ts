@@ -39,10 +39,18 @@ export type BoardRow = z.infer<typeof boardRow>
 const boardGroup = z.object({
   id: z.string(),
   name: z.string(),
+  /** Its first session today, by the timetable. */
   firstSessionAt: z.nullable(z.int()),
   /** Entries that are not withdrawn, and how many of them pass, with or without advisories. */
   entries: z.int(),
   passed: z.int(),
+  /** At the pace of this morning: when its last car is through, and whether that is before its own first session. Nothing is promised. */
+  forecast: z.object({
+    is: z.enum(['all through', 'in time', 'late', 'too early to say']),
+    lastAt: z.nullable(z.int()),
+    /** Cars without a pass yet today. */
+    toGo: z.int(),
+  }),
 })
 export type BoardGroup = z.infer<typeof boardGroup>
 

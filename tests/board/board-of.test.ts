@@ -31,8 +31,13 @@ function board(log: readonly LogEntry[], entries: readonly EntryFacts[] = [anEnt
     checklistHash: PADDOCK_CHECKLIST,
     limitsHash: PADDOCK_LIMITS,
     groups: [
-      { id: 'a', name: 'Novice', firstSessionAt: null },
-      { id: 'b', name: 'Advanced', firstSessionAt: AT },
+      { id: 'a', name: 'Novice' },
+      { id: 'b', name: 'Advanced' },
+    ],
+    timetable: [
+      { day: SATURDAY, kind: 'session', group: 'b', startsAt: AT + 3_600_000, endsAt: AT + 4_800_000 },
+      { day: SATURDAY, kind: 'session', group: 'b', startsAt: AT, endsAt: AT + 1_200_000 },
+      { day: '2026-05-10', kind: 'session', group: 'a', startsAt: AT + 86_400_000, endsAt: AT + 87_600_000 },
     ],
     entries,
   }

@@ -1,20 +1,31 @@
 import 'server-only'
 import { asc, eq } from 'drizzle-orm'
 import type { Db } from '@/db/client'
-import { car, entry, entryPerson, type event, person, runGroup } from '@/db/schema'
+import { car, entry, entryPerson, type event, person, runGroup, timetableBlock } from '@/db/schema'
 import { plateTail } from '@/lib/pass/plate-tail'
 import type { EntryFacts, EventFacts } from '../board-of'
 
 /** The event's rows as the board needs them; no contact of anybody. */
 export function eventFacts(database: Db, row: typeof event.$inferSelect): EventFacts {
   const groups = database
-    .select({ id: runGroup.id, name: runGroup.name, firstSessionAt: runGroup.firstSessionAt })
+    .select({ id: runGroup.id, name: runGroup.name })
     .from(runGroup)
     .where(eq(runGroup.eventId, row.id))
     .orderBy(asc(runGroup.order))
     .all()
   const { timeZone, checklistHash, limitsHash } = row
-  return { timeZone, checklistHash, limitsHash, groups, entries: entryFacts(database, row.id) }
+  const timetable = database
+    .select({
+      day: timetableBlock.day,
+      kind: timetableBlock.kind,
+      group: timetableBlock.groupId,
+      startsAt: timetableBlock.startsAt,
+      endsAt: timetableBlock.endsAt,
+    })
+    .from(timetableBlock)
+    .where(eq(timetableBlock.eventId, row.id))
+    .all()
+  return { timeZone, checklistHash, limitsHash, groups, timetable, entries: entryFacts(database, row.id) }
 }
 
 function entryFacts(database: Db, eventId: string): readonly EntryFacts[] {

@@ -1,6 +1,6 @@
-import { clockTime } from '@/app/_crew/say-when'
 import type { Board, BoardGroup, BoardRow } from '@/lib/contracts/board'
 import { BoardLine } from './board-line'
+import { forecastWords } from './forecast-words'
 
 interface BoardGroupListProps {
   readonly group: BoardGroup
@@ -11,7 +11,6 @@ interface BoardGroupListProps {
 /** One run group: how many of it pass, and each of its entries. Nothing where the filter leaves none. */
 export function BoardGroupList({ group, rows, board }: BoardGroupListProps) {
   if (rows.length === 0) return null
-  const session = group.firstSessionAt === null ? '' : ` · first session ${clockTime(group.firstSessionAt, board.timeZone)}`
   const headingId = `group-${group.id}`
   return (
     <section aria-labelledby={headingId} className="@container">
@@ -23,7 +22,7 @@ export function BoardGroupList({ group, rows, board }: BoardGroupListProps) {
           <span className="font-bold">
             {group.passed} of {group.entries} passed
           </span>
-          {session}
+          {forecastWords(group, board.timeZone)}
         </p>
       </div>
       <ul>
