@@ -4,6 +4,7 @@ import { db } from './client'
 import { migrateDatabase } from './migrate'
 import { demoEmail, MARRAM, MARRAM_ACCOUNTS } from './scenarios/marram'
 import { seedMarram } from './scenarios/seed-marram'
+import { seedMarramEntrant } from './scenarios/seed-marram-entrant'
 import { seedMarramEntries } from './scenarios/seed-marram-entries'
 
 // `npm run seed`: the demo club and its event of today into LOCKWIRE_DB. Run twice it changes nothing. Prints sign-ins and links as JSON.
@@ -12,6 +13,7 @@ migrateDatabase(database)
 assertDatabase(database)
 const seeded = await seedMarram(database, now())
 seedMarramEntries(database, seeded, now())
+seedMarramEntrant(database, seeded, now())
 database.$client.pragma('wal_checkpoint(TRUNCATE)')
 database.$client.close()
 
@@ -25,6 +27,7 @@ const said = {
     { what: 'Board', path: `/events/${seeded.eventId}/board` },
     { what: 'Bay', path: '/bay' },
     { what: 'Pit exit', path: '/pit-exit' },
+    { what: 'Entrant’s cars and entry', path: '/cars' },
   ],
 }
 process.stdout.write(`${JSON.stringify(said, null, 2)}\n`)

@@ -11,6 +11,8 @@ export const MARRAM = {
   listStaleMinutes: 30,
   checklist: 'checklists/closed-circuit/v1.json',
   limits: 'checklists/limits/track-day.json',
+  /** On the list it is the entrant's own. */
+  entrantNumber: '303',
   entryList: 'tests/fixtures/entries-clean.csv',
   /** For the demo alone: everybody may read it here. */
   password: 'ottermere-ring-demo',

@@ -19,7 +19,7 @@ function actorOf(accountId: string): AccountActor {
   return { kind: 'account', accountId, clubId: row.clubId, name: row.name, clubRoles: row.roles, signInHash: '' }
 }
 
-test('who runs the event is led to its board, crew to their post, an entrant to the entrants’ page', async () => {
+test('who runs the event is led to its board, crew to their post, an entrant to their cars and entries', async () => {
   const club = await aClub(fresh.database)
   const event = club.addEvent()
   const led = (role: Parameters<typeof club.addAccount>[0]) => {
@@ -32,7 +32,7 @@ test('who runs the event is led to its board, crew to their post, an entrant to 
   expect(led('admin')).toBe(`/events/${event}/board`)
   expect([led('chief'), led('scrutineer'), led('helper'), led('sign-on')]).toEqual(['/bay', '/bay', '/bay', '/bay'])
   expect(led('marshal')).toBe('/pit-exit')
-  expect(led('entrant')).toBe('/entrant')
+  expect(led('entrant')).toBe('/cars')
 })
 
 test('an organiser without an event is led to the list of events, and never to another club’s', async () => {

@@ -2,6 +2,7 @@ import { afterEach, beforeEach, expect, test } from 'vitest'
 import { account, crewMember, entry, event, runGroup } from '@/db/schema'
 import { MARRAM, MARRAM_ACCOUNTS } from '@/db/scenarios/marram'
 import { seedMarram } from '@/db/scenarios/seed-marram'
+import { seedMarramEntrant } from '@/db/scenarios/seed-marram-entrant'
 import { seedMarramEntries } from '@/db/scenarios/seed-marram-entries'
 import { isRightPassword } from '@/lib/platform/password'
 import { freshDatabase } from '../support/fresh-database'
@@ -17,6 +18,7 @@ afterEach(() => fresh.close())
 async function seed(now = NOW) {
   const seeded = await seedMarram(fresh.database, now)
   seedMarramEntries(fresh.database, seeded, now)
+  seedMarramEntrant(fresh.database, seeded, now)
   return seeded
 }
 

@@ -8,6 +8,7 @@ import { useSubjectState } from '@/lib/sync/client/use-day'
 import { CarActs } from './car-acts'
 import { CarHeader } from './car-header'
 import { CarTabs } from './car-tabs'
+import { DeclaredAgain } from './declared-again'
 import { WalkOrPlace } from './walk-or-place'
 
 interface CarScreenProps {
@@ -29,6 +30,7 @@ export function CarScreen({ entry, rest }: CarScreenProps) {
       {entry.note !== '' && person === null && place === null && (
         <p className="border-l-4 border-accent px-4 py-2">Said on the entry: {entry.note}</p>
       )}
+      {person === null && place === null && <DeclaredAgain entry={entry} />}
       {person === null ? (
         <WalkOrPlace key={entry.id} subject={{ car: entry.id }} base={base} place={place} told={entry.facts} />
       ) : (

@@ -9,6 +9,7 @@ import { UndoBar } from '@/app/_ui/undo-bar'
 import type { WalkPlace } from '@/lib/walk/walk-plan'
 import { CheckPanel } from './check-panel'
 import { ClosingPanel } from './closing-panel'
+import { DeclaredHere } from './declared-here'
 import { HeadsSoFar } from './heads-so-far'
 import { StopPicker } from './stop-picker'
 import type { Undo } from './use-undo'
@@ -39,6 +40,7 @@ export function PlaceScreen({ walk, here, base, undo }: PlaceScreenProps) {
       {item ? (
         <>
           <HeadsSoFar item={item} />
+          <DeclaredHere subject={walk.subject} check={item.check} />
           <CheckPanel
             key={item.check.id}
             item={item}

@@ -21,7 +21,7 @@ export function landingPath(database: Db, actor: AccountActor, now: number): str
   const events = myEvents(database, actor).map((own) => ({ ...own, today: venueDay(now, zones.get(own.id) ?? 'UTC') }))
   const nearest = nearestEvent(events)
   if (nearest) return placeOf(nearest.roles, nearest.id)
-  return can(actor.clubRoles, 'event:see') ? '/events' : '/entrant'
+  return can(actor.clubRoles, 'event:see') ? '/events' : '/cars'
 }
 
 function placeOf(roles: readonly Role[], eventId: string): string {

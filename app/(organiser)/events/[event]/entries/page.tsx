@@ -7,6 +7,7 @@ import { servedDatabase } from '@/lib/platform/served-database'
 import { dayReading } from '@/lib/sync/server/day-reading'
 import { EventFrame } from '../../../_frame/event-frame'
 import { guardEvent } from '../../../_frame/guard-event'
+import { DeclarationsSummary } from './_entries/declarations-summary'
 import { EntriesScreen } from './_entries/entries-screen'
 
 export const metadata: Metadata = { title: 'Entries' }
@@ -17,6 +18,7 @@ export default async function EntriesPage({ params }: { readonly params: Promise
   if (board === null) notFound()
   return (
     <EventFrame guarded={guarded} tab="entries" width="wide">
+      <DeclarationsSummary eventId={guarded.event.id} />
       <EntriesScreen eventId={guarded.event.id} first={board} mayImport={can(guarded.roles, 'entries:import')} />
     </EventFrame>
   )
