@@ -36,6 +36,7 @@ export const PROBLEM_CODES = [
   'declaration-closed',
   'import-refused',
   'import-stale',
+  'entry-edited-meanwhile',
   'photo-not-one',
   'photo-unreadable',
   'photo-too-many-pixels',

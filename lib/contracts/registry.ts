@@ -4,6 +4,7 @@ import { decideCrew, listCrew } from './crew'
 import { openEntryLink } from './entry-link'
 import { eventDeclarations } from './event-declarations'
 import { enrolDevice, listDevices, retireDevice } from './devices'
+import { editEntry } from './entry-edit'
 import { entryImport } from './entry-import'
 import { holds } from './holds'
 import { join, joinState, makeJoinCode, seeJoinCode } from './join'
@@ -38,6 +39,7 @@ export const CONTRACTS: readonly Contract[] = [
   live,
   board,
   entryImport,
+  editEntry,
   putPhoto,
   getPhoto,
   openEntryLink,

@@ -187,6 +187,12 @@ export const ERRORS: Readonly<Record<ProblemCode, ErrorWords>> = {
     kept: 'Nothing was imported.',
     todo: 'Look it through again and then import.',
   },
+  'entry-edited-meanwhile': {
+    status: 409,
+    what: 'Somebody changed this entry while you were editing.',
+    kept: 'Their change stands; what you typed is still in the form.',
+    todo: 'Look at what they changed beside your fields, then save again if yours is right.',
+  },
   'photo-not-one': {
     status: 415,
     what: 'What was sent is no photograph that Lockwire keeps.',

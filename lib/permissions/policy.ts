@@ -15,10 +15,14 @@ export const POLICY = {
   'event:edit': ['admin', 'organiser'],
   /** One's own: whoever sits in the entry. Whose it is, the command looks. */
   'entry:own': ['entrant'],
+  /** What changes about an entry once it has a record is a record: who may make that. */
+  'entries:edit': ['organiser', 'chief'],
   'entries:import': ['admin', 'organiser'],
   'entries:see': ['admin', 'organiser', 'chief'],
   'holds:see': ['admin', 'organiser', 'chief'],
   'board:see': ['admin', 'organiser', 'chief', 'scrutineer', 'helper', 'sign-on', 'marshal'],
+  /** E-mails and mobiles of people in cars. */
+  'contacts:see': ['admin', 'organiser'],
   'crew:accept': ['admin', 'organiser'],
   'crew:see': ['admin', 'organiser', 'chief'],
   /** One's own cars and kit. */

@@ -107,6 +107,7 @@ const MAY: Readonly<Record<string, readonly Role[]>> = {
   'crew-decide': ['admin', 'organiser'],
   'device-list': ['admin', 'organiser', 'chief'],
   'device-retire': ['admin', 'organiser'],
+  'entry-edit': ['organiser', 'chief'],
   'entry-import': ['admin', 'organiser'],
   'my-entry': ['entrant'],
   'declaration-draft': ['entrant'],
