@@ -97,7 +97,7 @@ describe('once the entry has a record', () => {
   ])('[F7] a change of %s leaves the pass %s', async (field, change, state) => {
     const { paddock, bay, car, dorian } = await aPassed()
     const before = paddock.rows().length
-    const saved = await saves(paddock, dorian, reads(paddock), change as Partial<EntryEdit>)
+    const saved = await saves(paddock, dorian, reads(paddock), change)
     if (isRefusal(saved)) throw new Error(saved.code)
     expect(saved.records).toBe(['note', 'colour'].includes(field) ? 0 : 1)
     expect(paddock.rows()).toHaveLength(before + saved.records)
@@ -197,7 +197,7 @@ describe('what is refused', () => {
   ])('%s is named with its field, and nothing is written', async (_, change, path, message) => {
     const { paddock, dorian } = await aPassed()
     const before = paddock.rows().length
-    const refused = await saves(paddock, dorian, reads(paddock), change as Partial<EntryEdit>)
+    const refused = await saves(paddock, dorian, reads(paddock), change)
     expect(isRefusal(refused) && refused.details.issues).toMatchObject([{ path, message: expect.stringMatching(message) as string }])
     expect(paddock.rows()).toHaveLength(before)
   })

@@ -1,3 +1,4 @@
+import { detectEncoding } from '@/lib/entries/detect-encoding'
 import { LARGEST_LIST_BASE64 } from '@/lib/contracts/entry-import'
 
 /** The list that was chosen: its bytes as they are. What they mean is found out by the server. */
@@ -29,6 +30,9 @@ export async function readFile(file: File, onPart: (bytesRead: number) => void):
   const parts: string[] = []
   for (let from = 0; from < bytes; from += PART) {
     const part = new Uint8Array(await file.slice(from, from + PART).arrayBuffer())
+    const found = from === 0 ? detectEncoding(part.subarray(0, 4_096)) : null
+    if (found?.kind === 'not-text')
+      return { fileName, why: `This is ${found.what}.`, todo: 'Save the list as CSV (UTF-8) in your spreadsheet and choose that file.' }
     parts.push(base64Of(part))
     onPart(Math.min(from + PART, bytes))
   }
