@@ -77,7 +77,7 @@ module.exports = {
       name: 'client-reaches-no-db',
       severity: 'error',
       comment: 'A browser file must not reach the database through anything it imports: read through call(contract).',
-      from: { path: ['^lib/.*/use-[^/]+\\.tsx?$', '^lib/sync/(client|core)/', '^lib/scanner/', '^app/(_ui|bay|sign-on|pit-exit)/(?!.*(page|layout)\\.tsx$)'] },
+      from: { path: ['^lib/.*/use-[^/]+\\.tsx?$', '^lib/sync/(client|core)/', '^lib/scanner/', '^app/(_ui|_crew|_walk|bay|sign-on|pit-exit)/(?!.*(page|layout)\\.tsx$)'] },
       to: { path: '^db/|(^|/)node_modules/(better-sqlite3|drizzle-orm|lucia|@node-rs/argon2)/', reachable: true },
     },
     {
