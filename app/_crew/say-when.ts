@@ -1,9 +1,10 @@
 import { civilDate } from '@/lib/rules/civil-date'
 import { dateInWords } from '@/lib/rules/date-in-words'
+import { venueClock } from '@/lib/rules/venue-clock'
 
 /** `07:41` in the venue's time zone. */
 export function clockTime(at: number, timeZone: string): string {
-  return new Intl.DateTimeFormat('en-GB', { hour: '2-digit', minute: '2-digit', hourCycle: 'h23', timeZone }).format(at)
+  return venueClock(at, timeZone)
 }
 
 /** `Sat 9 May 2026` for a civil date as text. Throws where it is none. */

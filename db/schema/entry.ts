@@ -202,6 +202,23 @@ export const printedPass = sqliteTable(
   (table) => [primaryKey({ columns: [table.eventId, table.counter] }), index('printed_pass_entry').on(table.entryId, table.day)],
 )
 
+/** When an entry is called to the bay, as it was told; a later plan changes it only when it is told anew. */
+export const callUp = sqliteTable(
+  'call_up',
+  {
+    entryId: text('entry_id')
+      .notNull()
+      .references(() => entry.id),
+    day: text('day').notNull(),
+    clubId: text('club_id')
+      .notNull()
+      .references(() => club.id),
+    startsAt: integer('starts_at').notNull(),
+    endsAt: integer('ends_at').notNull(),
+  },
+  (table) => [primaryKey({ columns: [table.entryId, table.day] })],
+)
+
 /** A list that was imported: its text's hash and what came of it. */
 export const entryImport = sqliteTable(
   'entry_import',

@@ -1,4 +1,4 @@
-import { index, integer, real, sqliteTable, text, uniqueIndex } from 'drizzle-orm/sqlite-core'
+import { index, integer, primaryKey, real, sqliteTable, text, uniqueIndex } from 'drizzle-orm/sqlite-core'
 import { club } from './club'
 
 export const event = sqliteTable(
@@ -83,6 +83,29 @@ export const timetableBlock = sqliteTable(
     noiseLimitDb: real('noise_limit_db'),
   },
   (table) => [index('timetable_block_event').on(table.eventId, table.startsAt)],
+)
+
+/** How the organiser plans the bay of one venue day; what it comes to is worked out from it. */
+export const bayPlan = sqliteTable(
+  'bay_plan',
+  {
+    eventId: text('event_id')
+      .notNull()
+      .references(() => event.id),
+    day: text('day').notNull(),
+    clubId: text('club_id')
+      .notNull()
+      .references(() => club.id),
+    opensAt: integer('opens_at').notNull(),
+    lanes: integer('lanes').notNull(),
+    windowMin: integer('window_min').notNull(),
+    /** Minutes a car is expected to take, and how much that scatters (standard deviation). */
+    carMin: real('car_min').notNull(),
+    carSdMin: real('car_sd_min').notNull(),
+    /** When its windows were last told to the entrants; null while they are only planned. */
+    publishedAt: integer('published_at'),
+  },
+  (table) => [primaryKey({ columns: [table.eventId, table.day] })],
 )
 
 /** Published checklists and limits by SHA-256 of their file, so that what a record pins can always be read again. */

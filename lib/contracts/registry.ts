@@ -1,3 +1,4 @@
+import { planBay, seeBayOrder } from './bay-order'
 import { board } from './board'
 import type { Contract } from './contract'
 import { decideCrew, listCrew } from './crew'
@@ -38,6 +39,8 @@ export const CONTRACTS: readonly Contract[] = [
   syncPull,
   live,
   board,
+  seeBayOrder,
+  planBay,
   entryImport,
   editEntry,
   putPhoto,

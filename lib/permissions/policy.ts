@@ -23,6 +23,8 @@ export const POLICY = {
   'board:see': ['admin', 'organiser', 'chief', 'scrutineer', 'helper', 'sign-on', 'marshal'],
   /** E-mails and mobiles of people in cars. */
   'contacts:see': ['admin', 'organiser'],
+  'order:see': ['admin', 'organiser', 'chief', 'scrutineer', 'helper', 'sign-on'],
+  'order:plan': ['admin', 'organiser'],
   'crew:accept': ['admin', 'organiser'],
   'crew:see': ['admin', 'organiser', 'chief'],
   /** One's own cars and kit. */

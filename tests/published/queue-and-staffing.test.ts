@@ -1,6 +1,5 @@
 import jstat from 'jstat'
 import { expect, test } from 'vitest'
-import { burst } from '@/lib/planning/burst'
 import { erlangB, erlangC, queueInSteadyFlow } from '@/lib/planning/erlang'
 import { peopleAtLeast, peopleNeeded } from '@/lib/planning/staffing'
 
@@ -50,18 +49,6 @@ test('a flow beyond what people can do never settles', () => {
   expect(queue.meanWaitMin).toBe(Number.POSITIVE_INFINITY)
   expect(queue.meanWaiting).toBe(Number.POSITIVE_INFINITY)
   expect(erlangC(40 / 7.5, 5)).toBe(1)
-})
-
-// Fluid queue: 60 cars, 8 minutes each, slots of 15 minutes; worked by hand.
-test.each([
-  [5, [0, 0.625, 7.25, 15.875, 14.5, 9.125], 25.4, 14.6],
-  [6, [0, 0, 4.75, 11.5, 8.25, 1], 15.3, 1.3],
-  [7, [0, 0, 2.875, 7.75, 2.625, 0], 8.9, 0],
-])('a burst of 60 cars against %d people', (people, waiting, worst, clears) => {
-  const made = burst([4, 10, 16, 18, 8, 4], people, 8, 15)
-  waiting.forEach((cars, slot) => expect(made.waiting[slot]).toBeCloseTo(cars, 3))
-  expect(made.worstWaitMin).toBeCloseTo(worst, 1)
-  expect(made.clearsAfterMin).toBeCloseTo(clears, 1)
 })
 
 // Closed form checked against Monte Carlo (20 000 runs of gamma service): N, mean, deviation, T → people at least, people for 95 %.

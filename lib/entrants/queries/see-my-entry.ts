@@ -1,7 +1,7 @@
 import 'server-only'
 import { and, asc, eq, gt } from 'drizzle-orm'
 import type { Db } from '@/db/client'
-import { timetableBlock } from '@/db/schema'
+import { callUp, timetableBlock } from '@/db/schema'
 import type { Book } from '@/lib/checklist/book'
 import type { MyEntry, myEntry } from '@/lib/contracts/my-entry'
 import type { SubjectState } from '@/lib/inspection/state'
@@ -46,7 +46,7 @@ export function readMyEntry(readDay: ReadDay, database: Db, actor: AccountActor,
     day: reading.day,
     when,
     nextSessionAt: nextSession(database, row, now),
-    callUp: null,
+    callUp: toldWindow(database, row.entry.id, now),
     people: row.people.map((person) => aboard(person, reading)),
     mayDeclare: isMyDrive(row) && when !== 'over' && !entry.withdrawn && !state.withdrawn,
     ...declaredAndSeen(database, actor, row, reading, state),
@@ -130,4 +130,16 @@ function nextSession(database: Db, { event, group }: MyEntryRow, now: number): n
     .get()
   if (block) return block.startsAt
   return group.firstSessionAt !== null && group.firstSessionAt > now ? group.firstSessionAt : null
+}
+
+/** The window the entry was told, the next that is not over; null where none was told. */
+function toldWindow(database: Db, entryId: string, now: number): MyEntry['callUp'] {
+  const told = database
+    .select({ from: callUp.startsAt, to: callUp.endsAt })
+    .from(callUp)
+    .where(and(eq(callUp.entryId, entryId), gt(callUp.endsAt, now)))
+    .orderBy(asc(callUp.startsAt))
+    .limit(1)
+    .get()
+  return told ?? null
 }
