@@ -53,6 +53,8 @@ export const daySnapshot = z.object({
       declaredAt: z.nullable(z.int()),
       /** What the signed declaration says: values by field, by `declaredKey` (`<check>`, or `<check>@<person>` for kit). Beside what is looked at, never instead of it. */
       declared: z.record(z.string(), figures),
+      /** Hashes of the photographs of labels, by the same key. */
+      declaredPhotos: z.record(z.string(), z.array(z.string())),
       /** Standing findings of the car's last event, for a yes or no (rule F11). */
       history: z.array(
         z.object({

@@ -10,10 +10,12 @@ interface PreCheckLineProps extends PreChecked {
   readonly check: Pick<BookCheck, 'rule' | 'source'>
   /** Nothing was said yet: no word is needed. */
   readonly isEmpty: boolean
+  /** Where the same question stands several times, its sources are shown once. */
+  readonly hidesSource?: boolean
 }
 
 /** What the bay’s rule makes of an answer, at once: the word, the figure that decided with its limit, what to bring, where the limit comes from. */
-export function PreCheckLine({ check, preCheck, judgement, isEmpty }: PreCheckLineProps) {
+export function PreCheckLine({ check, preCheck, judgement, isEmpty, hidesSource = false }: PreCheckLineProps) {
   return (
     <div>
       {/* Always there, so that what comes to stand in it is read out. */}
@@ -31,7 +33,7 @@ export function PreCheckLine({ check, preCheck, judgement, isEmpty }: PreCheckLi
           </div>
         )}
       </div>
-      {!isEmpty && judgement && <Sources source={check.source ?? []} />}
+      {!isEmpty && !hidesSource && judgement && <Sources source={check.source ?? []} />}
     </div>
   )
 }

@@ -29,28 +29,28 @@ export function EntrantFrame({ title, subtitle, tab, children }: EntrantFramePro
 function EntrantBar({ tab }: Pick<EntrantFrameProps, 'tab'>) {
   return (
     <div className="grid gap-2">
-      <div className="flex flex-wrap items-center justify-between gap-2">
+      <div className="flex items-center justify-between gap-2">
         <Brand />
-        <div className="flex gap-2">
-          <ThemeSwitch />
-          <SignOut />
-        </div>
+        <ThemeSwitch />
       </div>
-      <nav aria-label="Mine">
-        <ul className="flex gap-2">
-          {TABS.map(({ tab: own, label, href }) => (
-            <li key={own}>
-              <Link
-                href={href}
-                aria-current={own === tab ? 'page' : undefined}
-                className="target heading flex items-center border-b-4 border-transparent px-2 text-lg aria-[current=page]:border-accent"
-              >
-                {label}
-              </Link>
-            </li>
-          ))}
-        </ul>
-      </nav>
+      <div className="flex flex-wrap items-center justify-between gap-2">
+        <nav aria-label="Mine">
+          <ul className="flex">
+            {TABS.map(({ tab: own, label, href }) => (
+              <li key={own}>
+                <Link
+                  href={href}
+                  aria-current={own === tab ? 'page' : undefined}
+                  className="target heading flex items-center border-b-4 border-transparent px-2 text-lg aria-[current=page]:border-accent"
+                >
+                  {label}
+                </Link>
+              </li>
+            ))}
+          </ul>
+        </nav>
+        <SignOut />
+      </div>
     </div>
   )
 }

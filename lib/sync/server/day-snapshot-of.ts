@@ -132,6 +132,7 @@ function readEntries(database: Db, eventId: string): DaySnapshot['entries'] {
       declaration: signed === undefined ? null : { id: signed.id, version: signed.version },
       declaredAt: signed?.signedAt ?? null,
       declared: parts.answers,
+      declaredPhotos: parts.photos,
       history: [],
       people: (aboard.get(each.entry.id) ?? []).map(({ personId, role }) => ({ person: personId, role })),
       withdrawn: each.entry.withdrawn,

@@ -5,10 +5,10 @@ import { dayWords } from '@/app/_crew/say-when'
 import { Button } from '@/app/_ui/button'
 import { EmptyState } from '@/app/_ui/empty-state'
 import { Notice } from '@/app/_ui/notice'
-import { fieldsAtHome } from '@/lib/checklist/declarable'
 import { keepCar } from '@/lib/contracts/my-garage'
 import type { Problem } from '@/lib/contracts/problem'
 import { declaredItems } from '@/lib/entrants/declared-items'
+import { fieldsAsked } from '@/lib/entrants/fields-asked'
 import { factsToKeep } from '@/lib/entrants/kept-parts'
 import type { CarCard } from '@/lib/entrants/queries/car-card'
 import { call } from '@/lib/http/call'
@@ -48,7 +48,7 @@ export function CarForm({ card }: { readonly card: CarCard }) {
       <FactFields facts={facts} said={form.facts} onSaid={(said) => change({ ...form, facts: said })} />
       {items.map((item) => {
         const typed = form.typed[item.key] ?? {}
-        const fields = fieldsAtHome(item.check)
+        const fields = fieldsAsked(item.check, typed)
         const { problems } = readValues(fields, typed)
         const place = places.find(({ id }) => id === item.check.place)?.title ?? ''
         return (

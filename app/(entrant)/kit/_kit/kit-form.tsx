@@ -83,7 +83,7 @@ export function KitForm({ piece, kind, checks, lastDay, onClose }: KitFormProps)
           isEmpty={problems.length > 0 || Object.keys(values).length === 0}
         />
       )}
-      <PhotoField label="Photograph of the label" value={photoHash} onChange={setPhoto} />
+      <PhotoField label="The label itself" value={photoHash} onChange={setPhoto} />
       <div className="flex flex-wrap gap-3">
         <Button type="submit" isBusy={busy}>
           Keep it

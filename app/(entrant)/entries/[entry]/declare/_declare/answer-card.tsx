@@ -6,6 +6,8 @@ import { fieldsAtHome } from '@/lib/checklist/declarable'
 import type { DeclaredItem } from '@/lib/entrants/declared-items'
 import { readValues, type Typed } from '@/lib/walk/read-values'
 import { AnswerFields } from '@/app/(entrant)/_answers/answer-fields'
+import { fieldsAsked } from '@/lib/entrants/fields-asked'
+import { Sources } from '@/app/(entrant)/_answers/sources'
 import { PreCheckLine } from '@/app/(entrant)/_answers/pre-check-line'
 import type { AnswerGroup } from './answer-groups'
 import type { FormState } from '@/app/(entrant)/_answers/form-state'
@@ -36,13 +38,14 @@ export function AnswerCard({ group, form, placeOf, onTyped, onPhotos }: AnswerCa
           className={isSeveral ? 'grid gap-3 border-l-4 pl-3' : 'grid gap-3'}
         >
           {isSeveral && <h4 className="heading text-lg">{placeOf(item.check.place)}</h4>}
-          <Answer item={item} typed={form.typed[item.key] ?? {}} onTyped={onTyped} />
+          <Answer item={item} typed={form.typed[item.key] ?? {}} onTyped={onTyped} hidesSource={isSeveral} />
           {item === first && isSeveral && <SameOnAll group={group} form={form} onTyped={onTyped} />}
         </div>
       ))}
+      {isSeveral && first.kind === 'label' && <Sources source={first.check.source ?? []} />}
       {hasLabel(first) && (
         <PhotoField
-          label="Photograph of the label"
+          label="The label itself"
           description="If you can: the bay sees it beside what you declared."
           value={form.photos[first.key]?.[0] ?? null}
           onChange={(hash) => onPhotos(first.key, hash === null ? [] : [hash])}
@@ -52,14 +55,26 @@ export function AnswerCard({ group, form, placeOf, onTyped, onPhotos }: AnswerCa
   )
 }
 
-function Answer({ item, typed, onTyped }: { readonly item: DeclaredItem; readonly typed: Typed } & Pick<AnswerCardProps, 'onTyped'>) {
-  const fields = fieldsAtHome(item.check)
+interface AnswerProps extends Pick<AnswerCardProps, 'onTyped'> {
+  readonly item: DeclaredItem
+  readonly typed: Typed
+  readonly hidesSource: boolean
+}
+
+function Answer({ item, typed, onTyped, hidesSource }: AnswerProps) {
+  const fields = fieldsAsked(item.check, typed)
   const { problems } = readValues(fields, typed)
   const isEmpty = Object.values(typed).every((text) => text.trim() === '')
   return (
     <>
       <AnswerFields name={item.key} fields={fields} typed={typed} problems={problems} onTyped={(next) => onTyped(item.key, next)} />
-      <PreCheckLine check={item.check} preCheck={item.preCheck} judgement={item.judgement} isEmpty={isEmpty || problems.length > 0} />
+      <PreCheckLine
+        check={item.check}
+        preCheck={item.preCheck}
+        judgement={item.judgement}
+        isEmpty={isEmpty || problems.length > 0}
+        hidesSource={hidesSource}
+      />
     </>
   )
 }
