@@ -50,6 +50,8 @@ export async function findCar(page: Page, number: string): Promise<void> {
   const another = page.getByRole('button', { name: 'Another car' })
   if ((await another.count()) > 0) await another.click()
   await page.getByLabel('Number, plate or code on the sticker').fill(number)
+  // The list is drawn a moment after the typing; before that Enter would open nothing.
+  await page.getByRole('heading', { name: /^\d+ found$/ }).waitFor()
   await page.keyboard.press('Enter')
   await page.getByRole('heading', { level: 1, name: number, exact: true }).waitFor()
 }
