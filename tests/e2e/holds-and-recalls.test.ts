@@ -91,7 +91,7 @@ test('[P8] offline, holding one driver of a shared car lets the other drive; hol
     await page.getByRole('button', { name: 'Which group is running?' }).click()
     await page.getByRole('dialog').getByRole('button', { name: 'Pit lane open to all groups' }).click()
     const said = await ask(page, shared.number, 'PASSED')
-    expect(said).toContain(`${shared.driver}`)
+    expect(said).toContain(shared.driver)
     expect(said).toContain(CO_DRIVER)
   })
   await onBoth('one driver is held: the other may drive', async () => {

@@ -92,7 +92,7 @@ describe('a car on the pass list', () => {
 describe('a block in words', () => {
   test.each<[string, () => readonly LogEntry[], object]>([
     ['a hold by its reason', () => [hold({ stations: ['body'] })], { kind: 'hold', words: 'light contact', seeAgain: ['Body'] }],
-    ['a hold of a reason no list has', () => [hold({ reason: 'kerb-strike', stations: ['wheels'] })], { words: 'kerb strike' }],
+    ['a hold of a reason no list has', () => [hold({ reason: 'a-newer-reason', stations: ['wheels'] })], { words: 'a newer reason' }],
     ['a hold by the station of its checks', () => [hold({ checks: ['wheels.nuts'] })], { seeAgain: ['Wheels and tyres'] }],
     ['a hold that names nothing', () => [hold()], { seeAgain: [CHIEF_ONLY] }],
     [

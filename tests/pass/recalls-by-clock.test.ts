@@ -16,13 +16,13 @@ const AFTER_1 = { when: 'session-over', group: GROUP_A, session: 1 } as const
 const due = (records: Parameters<typeof recallsByClock>[0], now: number) =>
   recallsByClock(records, CAR, TIMETABLE, now).map(({ since }) => since)
 
-test('[F13] a recall after a session blocks from the moment the timetable ends it', () => {
+test('[P2] a recall after a session blocks from the moment the timetable ends it', () => {
   const later = recall(AFTER_1, { stations: ['brakes'], at: MADE })
   expect(due([later], 10 * HOUR - 1)).toEqual([])
   expect(due([later], 10 * HOUR)).toEqual([10 * HOUR])
 })
 
-test('[F13] a recall at a time blocks from that time', () => {
+test('[P2] a recall at a time blocks from that time', () => {
   const later = recall({ when: 'time', at: 12 * HOUR }, { at: MADE })
   expect([due([later], 12 * HOUR - 1), due([later], 12 * HOUR)]).toEqual([[], [12 * HOUR]])
 })
@@ -48,7 +48,7 @@ test('one that the chief lifted does not block; a lift without the right to lift
   expect(due([later, lifted([later], { quarantined: 'wrong-role' })], 13 * HOUR)).toEqual([10 * HOUR])
 })
 
-test('[T1] a recall without the right to recall still blocks', () => {
+test('[P2] a recall without the right to recall still blocks', () => {
   expect(due([recall(AFTER_1, { at: MADE, quarantined: 'wrong-role' })], 13 * HOUR)).toEqual([10 * HOUR])
 })
 
