@@ -14,7 +14,7 @@ const everywhere = [
 const config = {
   poweredByHeader: false,
   // Native modules stay what they are: a bundler cannot hold them.
-  serverExternalPackages: ['better-sqlite3', '@node-rs/argon2', 'sharp'],
+  serverExternalPackages: ['better-sqlite3', '@node-rs/argon2', 'nodemailer', 'sharp'],
   // The optimiser would fetch and decode what it is told to; proxy.ts refuses its address as well.
   images: { unoptimized: true },
   // Types are checked by their own lane over the whole project (`npm run typecheck`); here they would only be checked a second time.

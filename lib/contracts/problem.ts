@@ -37,6 +37,7 @@ export const PROBLEM_CODES = [
   'import-refused',
   'import-stale',
   'entry-edited-meanwhile',
+  'mail-count-changed',
   'photo-not-one',
   'photo-unreadable',
   'photo-too-many-pixels',

@@ -10,6 +10,7 @@ import { entryImport } from './entry-import'
 import { holds } from './holds'
 import { join, joinState, makeJoinCode, seeJoinCode } from './join'
 import { live } from './live'
+import { eventMail, mailAgain, writeMailing } from './mail'
 import { me } from './me'
 import { getPhoto, putPhoto } from './photos'
 import { saveDraft, signDeclaration } from './my-declaration'
@@ -43,6 +44,9 @@ export const CONTRACTS: readonly Contract[] = [
   planBay,
   entryImport,
   editEntry,
+  eventMail,
+  writeMailing,
+  mailAgain,
   putPhoto,
   getPhoto,
   openEntryLink,

@@ -193,6 +193,12 @@ export const ERRORS: Readonly<Record<ProblemCode, ErrorWords>> = {
     kept: 'Their change stands; what you typed is still in the form.',
     todo: 'Look at what they changed beside your fields, then save again if yours is right.',
   },
+  'mail-count-changed': {
+    status: 409,
+    what: 'It would be another number of mails than you have seen.',
+    kept: 'Nothing was written, and nothing is sent.',
+    todo: 'Look at the new number, then send.',
+  },
   'photo-not-one': {
     status: 415,
     what: 'What was sent is no photograph that Lockwire keeps.',

@@ -33,6 +33,8 @@ export const POLICY = {
   'device:enrol': ['chief', 'scrutineer', 'helper', 'sign-on', 'marshal', 'organiser'],
   'device:retire': ['admin', 'organiser'],
   'day:load': ['chief', 'scrutineer', 'helper', 'sign-on', 'marshal', 'organiser'],
+  'mail:see': ['admin', 'organiser'],
+  'mail:send': ['admin', 'organiser'],
   'photo:put': ['admin', 'organiser', 'chief', 'scrutineer', 'helper', 'sign-on', 'marshal', 'entrant'],
   /** Another's photograph at an event; one's own is always seen. */
   'photo:see': ['admin', 'organiser', 'chief', 'scrutineer', 'helper', 'sign-on', 'marshal'],

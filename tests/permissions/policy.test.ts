@@ -22,6 +22,8 @@ const MATRIX: Readonly<Record<Action, string>> = {
   'device:enrol': '         no    yes       yes   yes        yes    yes     yes     no',
   'device:retire': '        yes   yes       no    no         no     no      no      no',
   'day:load': '             no    yes       yes   yes        yes    yes     yes     no',
+  'mail:see': '             yes   yes       no    no         no     no      no      no',
+  'mail:send': '            yes   yes       no    no         no     no      no      no',
   'photo:put': '            yes   yes       yes   yes        yes    yes     yes     yes',
   'photo:see': '            yes   yes       yes   yes        yes    yes     yes     no',
   'record:presented': '     no    no        yes   yes        yes    yes     yes     no',

@@ -6,6 +6,7 @@ test('with nothing said it serves localhost from ./data', () => {
     origin: 'http://localhost:3000',
     databaseFile: './data/lockwire.db',
     photoFolder: './data/lockwire.db-photos',
+    smtp: null,
     production: false,
     logLevel: 'info',
   })

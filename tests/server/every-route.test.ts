@@ -121,6 +121,9 @@ const MAY: Readonly<Record<string, readonly Role[]>> = {
   'pass-void': ['organiser', 'chief'],
   'see-bay-order': ['admin', 'organiser', 'chief', 'scrutineer', 'helper', 'sign-on'],
   'plan-bay': ['admin', 'organiser'],
+  'event-mail': ['admin', 'organiser'],
+  'mail-write': ['admin', 'organiser'],
+  'mail-again': ['admin', 'organiser'],
   board: ['admin', 'organiser', 'chief', 'scrutineer', 'helper', 'sign-on', 'marshal'],
 }
 

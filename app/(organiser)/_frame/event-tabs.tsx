@@ -1,7 +1,7 @@
 import Link from 'next/link'
 import { type Action, can, type Role } from '@/lib/permissions/policy'
 
-export type EventTab = 'board' | 'holds' | 'order' | 'entries' | 'import' | 'people' | 'devices'
+export type EventTab = 'board' | 'holds' | 'order' | 'entries' | 'import' | 'people' | 'devices' | 'mail'
 
 const TABS: readonly { readonly tab: EventTab; readonly label: string; readonly action: Action }[] = [
   { tab: 'board', label: 'Board', action: 'board:see' },
@@ -9,6 +9,7 @@ const TABS: readonly { readonly tab: EventTab; readonly label: string; readonly 
   { tab: 'order', label: 'Bay order', action: 'order:see' },
   { tab: 'entries', label: 'Entries', action: 'entries:see' },
   { tab: 'import', label: 'Import', action: 'entries:import' },
+  { tab: 'mail', label: 'Mail', action: 'mail:see' },
   { tab: 'people', label: 'People', action: 'crew:see' },
   { tab: 'devices', label: 'Devices', action: 'crew:see' },
 ]
