@@ -1,6 +1,6 @@
 'use client'
 
-import { OneOf } from '@/app/bay/_screens/one-of'
+import { OneOf } from '@/app/_walk/one-of'
 import { SelectField, TextField } from '@/app/_ui/field'
 import type { MeasureField } from '@/lib/checklist/checklist'
 import type { ReadValues, Typed } from '@/lib/walk/read-values'

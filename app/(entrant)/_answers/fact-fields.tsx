@@ -1,6 +1,6 @@
 'use client'
 
-import { OneOf } from '@/app/bay/_screens/one-of'
+import { OneOf } from '@/app/_walk/one-of'
 import { evaluateCondition } from '@/lib/checklist/condition'
 import type { FactDefinition } from '@/lib/checklist/checklist'
 import type { Figures } from '@/lib/contracts/declaration'

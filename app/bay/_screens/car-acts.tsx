@@ -10,7 +10,7 @@ import { can } from '@/lib/permissions/policy'
 import type { DayEntry } from '@/lib/sync/client/day-client'
 import { useDayStatus } from '@/lib/sync/client/use-day'
 import { RecallSheet } from './recall-sheet'
-import type { WalkSubject } from './use-walk'
+import type { WalkSubject } from '@/app/_walk/use-walk'
 
 interface CarActsProps {
   readonly entry: DayEntry

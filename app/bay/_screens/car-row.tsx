@@ -4,7 +4,7 @@ import { OutcomeShape } from '@/app/_ui/outcome-shape'
 import { Wire } from '@/app/_ui/wire'
 import { wireSentence, wireStations } from '@/lib/inspection/wire'
 import type { DayEntry } from '@/lib/sync/client/day-client'
-import { VERDICT_SHAPES } from './verdict-words'
+import { VERDICT_SHAPES } from '@/app/_walk/verdict-words'
 
 /** One car found: number, plate, what it looks like, and how it stands. */
 export function CarRow({ entry }: { readonly entry: DayEntry }) {

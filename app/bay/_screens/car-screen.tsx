@@ -9,7 +9,7 @@ import { CarActs } from './car-acts'
 import { CarHeader } from './car-header'
 import { CarTabs } from './car-tabs'
 import { DeclaredAgain } from './declared-again'
-import { WalkOrPlace } from './walk-or-place'
+import { WalkOrPlace } from '@/app/_walk/walk-or-place'
 
 interface CarScreenProps {
   readonly entry: DayEntry

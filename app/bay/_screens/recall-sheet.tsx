@@ -11,8 +11,8 @@ import { TextField } from '@/app/_ui/field'
 import { Sheet } from '@/app/_ui/sheet'
 import type { DayEntry } from '@/lib/sync/client/day-client'
 import { timeTrigger, triggerChoices } from './recall-trigger'
-import { stationsHere } from './stations-here'
-import type { WalkSubject } from './use-walk'
+import { stationsHere } from '@/app/_walk/stations-here'
+import type { WalkSubject } from '@/app/_walk/use-walk'
 
 interface RecallSheetProps {
   readonly entry: DayEntry

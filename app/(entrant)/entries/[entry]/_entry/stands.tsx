@@ -1,4 +1,4 @@
-import { VERDICT_SHAPES } from '@/app/bay/_screens/verdict-words'
+import { VERDICT_SHAPES } from '@/app/_walk/verdict-words'
 import { OutcomeShape } from '@/app/_ui/outcome-shape'
 import { Wire } from '@/app/_ui/wire'
 import type { MyEntry } from '@/lib/contracts/my-entry'

@@ -1,5 +1,5 @@
 import { memo } from 'react'
-import { VERDICT_SHAPES } from '@/app/bay/_screens/verdict-words'
+import { VERDICT_SHAPES } from '@/app/_walk/verdict-words'
 import { NumberPlate } from '@/app/_ui/number-plate'
 import { OutcomeShape } from '@/app/_ui/outcome-shape'
 import { Wire } from '@/app/_ui/wire'

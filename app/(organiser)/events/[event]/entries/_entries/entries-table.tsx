@@ -1,4 +1,4 @@
-import { VERDICT_SHAPES } from '@/app/bay/_screens/verdict-words'
+import { VERDICT_SHAPES } from '@/app/_walk/verdict-words'
 import { DataTable, Td, Th } from '@/app/_ui/data-table'
 import { NumberPlate } from '@/app/_ui/number-plate'
 import { OutcomeShape } from '@/app/_ui/outcome-shape'
