@@ -1,5 +1,6 @@
 'use client'
 
+import Link from 'next/link'
 import { useState } from 'react'
 import { EmptyState } from '@/app/_ui/empty-state'
 import { EVERYTHING, filterRows } from '@/lib/board/filter-rows'
@@ -31,7 +32,12 @@ export function BoardScreen({ eventId, first, seesHolds = false }: BoardScreenPr
   return (
     <div className="grid gap-x-8 gap-y-6 xl:grid-cols-[minmax(0,1fr)_400px] xl:grid-rows-[auto_1fr]">
       <div className="grid min-w-0 content-start gap-4">
-        <ConnectionLine connection={connection} board={board} />
+        <div className="flex flex-wrap items-center justify-between gap-x-6">
+          <ConnectionLine connection={connection} board={board} />
+          <Link href={`/events/${eventId}/wall`} className="target inline-flex items-center text-accent underline underline-offset-4">
+            For the big screen
+          </Link>
+        </div>
         <BoardFilterBar filter={filter} onChange={setFilter} rows={board.rows} shown={rows.length} />
       </div>
       <NeedsColumn

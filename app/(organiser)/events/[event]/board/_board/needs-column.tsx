@@ -6,9 +6,9 @@ import { Button } from '@/app/_ui/button'
 import { classNames } from '@/app/_ui/class-names'
 import { HardLink } from '@/app/_ui/hard-link'
 import { NumberPlate } from '@/app/_ui/number-plate'
-import { OutcomeShape, type OutcomeState } from '@/app/_ui/outcome-shape'
-import { compareNumbers } from '@/lib/board/compare-numbers'
-import { type BoardRow, NEED_KINDS } from '@/lib/contracts/board'
+import { OutcomeShape } from '@/app/_ui/outcome-shape'
+import type { BoardRow } from '@/lib/contracts/board'
+import { byPressing, NEED_SHAPES } from './need-shapes'
 
 /** On a phone the groups stand below this list, so it shows only so many until asked for all. */
 const FIRST = 5
@@ -23,9 +23,7 @@ interface NeedsColumnProps {
 /** Who needs somebody, and for what; the most pressing on top. Whatever the board is searched for, all of them stay. */
 export function NeedsColumn({ rows, holdsPath, className }: NeedsColumnProps) {
   const [all, setAll] = useState(false)
-  const needing = rows
-    .filter(({ needs }) => needs.length > 0)
-    .toSorted((a, b) => pressing(a) - pressing(b) || compareNumbers(a.number, b.number))
+  const needing = byPressing(rows)
   return (
     <aside aria-labelledby="needs" className={classNames('border-2 p-4', className)}>
       <h2 id="needs" className="text-2xl">
@@ -44,7 +42,7 @@ export function NeedsColumn({ rows, holdsPath, className }: NeedsColumnProps) {
               <ul>
                 {row.needs.map(({ kind, words }) => (
                   <li key={`${kind} ${words}`} className="flex gap-2">
-                    <OutcomeShape state={SHAPES[kind]} className="mt-0.5 size-5" />
+                    <OutcomeShape state={NEED_SHAPES[kind]} className="mt-0.5 size-5" />
                     {words}
                   </li>
                 ))}
@@ -75,20 +73,3 @@ export function NeedsColumn({ rows, holdsPath, className }: NeedsColumnProps) {
 const LINK = 'target inline-flex items-center text-accent underline underline-offset-4'
 /** What the page of the holds tells more of, or does something about. */
 const IN_HOLDS: readonly string[] = ['held', 'person', 'two-passes']
-
-/** What asks for a person has the shape that says so. */
-const SHAPES: Readonly<Record<BoardRow['needs'][number]['kind'], OutcomeState>> = {
-  held: 'held',
-  'not-passed': 'fail',
-  disagreement: 'ask',
-  'set-aside': 'ask',
-  'two-passes': 'ask',
-  'could-not-see': 'ask',
-  'pass-dead': 'ask',
-  'no-pass': 'ask',
-  person: 'ask',
-}
-
-function pressing({ needs }: BoardRow): number {
-  return Math.min(...needs.map(({ kind }) => NEED_KINDS.indexOf(kind)))
-}

@@ -20,6 +20,7 @@ export function WindowList({ order }: { readonly order: BayOrderView }) {
     ...windows.map((window) => ({ from: window.from, window, hole: null })),
     ...holes.map((hole) => ({ from: hole.from, window: null, hole })),
   ].toSorted((a, b) => a.from - b.from)
+  const known = order.groups.some(({ firstSessionAt }) => firstSessionAt !== null)
   const late = windows.filter(({ isLate }) => isLate).reduce((sum, { cars }) => sum + cars.length, 0)
   return (
     <section aria-labelledby="windows" className="grid gap-3">
@@ -27,7 +28,7 @@ export function WindowList({ order }: { readonly order: BayOrderView }) {
         Call-up windows
       </h2>
       <p role="status" className={late > 0 ? 'font-bold' : ''}>
-        {late === 0 ? 'Every car is called before its group’s first session.' : lateWords(late)}
+        {late > 0 ? lateWords(late) : known ? 'Every car is called before its group’s first session.' : NO_TIMETABLE}
       </p>
       <ol>
         {lines.map(({ window, hole }) =>
@@ -52,6 +53,8 @@ export function WindowList({ order }: { readonly order: BayOrderView }) {
     </section>
   )
 }
+
+const NO_TIMETABLE = 'The timetable has no session on this day, so nobody can say whether that is in time.'
 
 function lateWords(late: number): string {
   const cars = late === 1 ? '1 car is' : `${late} cars are`
