@@ -9,6 +9,8 @@ import { Button } from '@/app/_ui/button'
 import { EmptyState } from '@/app/_ui/empty-state'
 import { useDayEntries, useDayVersion } from '@/lib/sync/client/use-day'
 import { CarRow } from './car-row'
+import { entryOfScan } from './entry-of-scan'
+import { ScanToFind } from './scan-to-find'
 import { entryOfCode, isUnfinished, searchCars } from './search-cars'
 
 /** Cars shown at most; nobody scrolls through more with a glove on. */
@@ -25,7 +27,7 @@ export function FindCar() {
   const found = useMemo(
     () =>
       isAsked
-        ? searchCars(entries, query, entryOfCode(day.passList(), query))
+        ? searchCars(entries, query, entryOfScan(query, day.snapshot(), day.passList()) ?? entryOfCode(day.passList(), query))
         : entries.filter(({ id }) => isUnfinished(day.state(`car:${id}`).verdict)),
     // eslint-disable-next-line react-hooks/exhaustive-deps -- `version` stands for all that the day's states and list are made of
     [day, entries, query, isAsked, version],
@@ -50,6 +52,7 @@ export function FindCar() {
           enterKeyHint="go"
         />
       </label>
+      <ScanToFind />
       {query !== '' && (
         <Button look="quiet" className="self-start" onClick={() => setQuery('')}>
           Clear

@@ -45,7 +45,7 @@ export function EntryScreen({ first }: { readonly first: MyEntry }) {
           <h2 id="code" className="text-xl">
             Entry code
           </h2>
-          <p className="max-w-prose">Show it in the bay: their camera finds your car by it. It is no pass.</p>
+          <p className="max-w-prose">Show it in the bay: their camera finds your car by it, or they type it. It is no pass.</p>
           <QrCode text={entry.codeText} label={`Entry code ${entry.codeText}`} className="w-56 max-w-full border" />
           <p className="serial">{entry.codeText}</p>
         </section>

@@ -4,7 +4,7 @@ import { Sources } from '../../../_answers/sources'
 
 /** What is to be mended, and what was noted: with the figure that decided, its limit, what to bring, and where the limit comes from. */
 export function MendList({ entry }: { readonly entry: MyEntry }) {
-  if (entry.mend.length === 0) return null
+  if (entry.mend.length === 0 || entry.when === 'over') return null
   const isFail = entry.mend.some(({ weight }) => weight === 'fail')
   return (
     <section aria-labelledby="mend" className="grid gap-3">

@@ -8,9 +8,14 @@ export function Stands({ entry }: { readonly entry: MyEntry }) {
   const isLookedAt = entry.isPresented || !['not presented', 'declared only'].includes(entry.verdict)
   return (
     <section aria-label="How it stands" className="grid gap-4 border-y-[3px] py-5" aria-live="polite">
-      {isLookedAt ? <Seen entry={entry} /> : <Declared entry={entry} />}
+      {entry.when === 'over' ? <Over /> : isLookedAt ? <Seen entry={entry} /> : <Declared entry={entry} />}
     </section>
   )
+}
+
+/** A verdict is for its venue day: days later it would read as if nobody had looked. */
+function Over() {
+  return <p className="heading text-2xl">The event is over. What was seen and signed is kept.</p>
 }
 
 function Declared({ entry: { preCheck, declaration } }: { readonly entry: MyEntry }) {

@@ -1,11 +1,12 @@
 'use client'
 
 import { useMemo } from 'react'
-import { clockTime } from '@/app/_crew/say-when'
+import { clockTime, dayWords } from '@/app/_crew/say-when'
 import { NumberPlate } from '@/app/_ui/number-plate'
 import { declaredItems, type DeclaredItem } from '@/lib/entrants/declared-items'
 import type { Declaring } from '@/lib/entrants/queries/declaring-of'
 import { civilDate } from '@/lib/rules/civil-date'
+import { venueDay } from '@/lib/rules/venue-day'
 import type { Typed } from '@/lib/walk/read-values'
 import { FactFields } from '@/app/(entrant)/_answers/fact-fields'
 import { AnswerCard } from './answer-card'
@@ -123,8 +124,9 @@ function Intro({ declaring: { from, signed, isPresented, event } }: { readonly d
       )}
       {signed && (
         <p className="border-l-4 border-accent pl-3">
-          Version {signed.version} was signed at {clockTime(signed.signedAt, event.timeZone)}. What you sign now becomes version{' '}
-          {signed.version + 1}; the earlier one stays as it is.
+          Version {signed.version} was signed {dayWords(venueDay(signed.signedAt, event.timeZone))},{' '}
+          {clockTime(signed.signedAt, event.timeZone)}. What you sign now becomes version {signed.version + 1}; the earlier one stays as it
+          is.
         </p>
       )}
       {isPresented && (
