@@ -1,6 +1,6 @@
 'use client'
 
-import { useState } from 'react'
+import { useEffect, useRef, useState } from 'react'
 import { Button } from '@/app/_ui/button'
 import { triggerWords } from '@/lib/pass/trigger-words'
 import { useDayVersion } from '@/lib/sync/client/use-day'
@@ -33,21 +33,13 @@ export function DaySwitchesPanel() {
 
   if (question !== null)
     return (
-      <section className="grid gap-3 border-l-8 border-accent bg-surface p-4" aria-label="Say it for the whole event">
-        <p className="text-xl font-bold">{question.ask}</p>
-        <p>{question.means}</p>
-        <ProblemNotice problem={problem} />
-        <Button
-          size="large"
-          isBusy={busy}
-          onClick={() => void act(question.say).then((isDone) => (isDone ? setQuestion(null) : undefined))}
-        >
-          {question.yes}
-        </Button>
-        <Button look="quiet" onClick={() => setQuestion(null)}>
-          Not now
-        </Button>
-      </section>
+      <Asked
+        question={question}
+        busy={busy}
+        problem={problem}
+        onYes={() => void act(question.say).then((isDone) => (isDone ? setQuestion(null) : undefined))}
+        onNo={() => setQuestion(null)}
+      />
     )
   const questions = [
     wetQuestion(switches.isWet, () => sayWet(day, !switches.isWet)),
@@ -80,6 +72,39 @@ export function DaySwitchesPanel() {
           {past.has(one.id) && ' (past, by the timetable)'}
         </Button>
       ))}
+    </section>
+  )
+}
+
+interface AskedProps {
+  readonly question: Question
+  readonly busy: boolean
+  readonly problem: ReturnType<typeof useAction>['problem']
+  readonly onYes: () => void
+  readonly onNo: () => void
+}
+
+/** Said once more before it is said to everybody: none of it can be taken back. */
+function Asked({ question, busy, problem, onYes, onNo }: AskedProps) {
+  const here = useRef<HTMLElement>(null)
+  // It may stand below the edge of the sheet: whoever asked must see it.
+  useEffect(() => here.current?.focus(), [])
+  return (
+    <section
+      ref={here}
+      tabIndex={-1}
+      className="grid gap-3 border-l-8 border-accent bg-surface p-4 outline-none"
+      aria-label="Say it for the whole event"
+    >
+      <p className="text-xl font-bold">{question.ask}</p>
+      <p>{question.means}</p>
+      <ProblemNotice problem={problem} />
+      <Button look="secondary" onClick={onNo}>
+        Not now
+      </Button>
+      <Button size="large" isBusy={busy} onClick={onYes}>
+        {question.yes}
+      </Button>
     </section>
   )
 }

@@ -3,7 +3,6 @@
 import { useState } from 'react'
 import { Button } from '@/app/_ui/button'
 import { Choice } from '@/app/_ui/choice'
-import { NumberPlate } from '@/app/_ui/number-plate'
 import { Sheet } from '@/app/_ui/sheet'
 import type { HoldRow } from '@/lib/checklist/hold-table'
 import { pickableHolds } from '@/lib/checklist/resolve-hold'
@@ -52,7 +51,7 @@ export function HoldSheet({ entry: id, onHeld, onClose }: HoldSheetProps) {
         <ProblemNotice problem={problem} />
         {asking === null ? (
           <>
-            <fieldset className="flex flex-wrap gap-x-6">
+            <fieldset className="flex flex-wrap gap-x-4">
               <legend className="font-bold">Its sticker</legend>
               {STICKER.map(({ says, removed: value }) => (
                 <Choice key={says} type="radio" name="sticker" checked={removed === value} onChange={() => setRemoved(value)}>
@@ -75,11 +74,8 @@ export function HoldSheet({ entry: id, onHeld, onClose }: HoldSheetProps) {
 
 function CarLine({ entry }: { readonly entry: DayEntry }) {
   return (
-    <p className="flex flex-wrap items-center gap-4">
-      <NumberPlate number={entry.number} size="row" />
-      <span>
-        {entry.plate} · {entry.colour} · {entry.model}
-      </span>
+    <p>
+      {entry.plate} · {entry.colour} · {entry.model}
     </p>
   )
 }
@@ -93,18 +89,18 @@ interface ReasonsProps {
 /** The whole table: what stops the car first, then what stops a person and no car. */
 function Reasons({ rows, busy, onPick }: ReasonsProps) {
   const button = (row: HoldRow) => (
-    <Button key={row.id} look="secondary" size="large" isBusy={busy} onClick={() => onPick(row)}>
+    <Button key={row.id} look="secondary" className="target-outcome text-lg" isBusy={busy} onClick={() => onPick(row)}>
       {row.words}
     </Button>
   )
   return (
     <>
-      <fieldset className="grid gap-3 sm:grid-cols-2">
+      <fieldset className="grid grid-cols-2 gap-3">
         <legend className="mb-2 font-bold">The car stops, whoever drives it</legend>
         {rows.filter(({ car }) => car !== null).map(button)}
       </fieldset>
       <p className="text-muted">“Something else” names nothing to see again: only the chief lifts it.</p>
-      <fieldset className="grid gap-3 sm:grid-cols-2">
+      <fieldset className="grid grid-cols-2 gap-3">
         <legend className="mb-2 font-bold">One person stops, and no car</legend>
         {rows.filter(({ car }) => car === null).map(button)}
       </fieldset>

@@ -14,7 +14,7 @@ export function LooksSideBySide({ heads, check }: { readonly heads: readonly Hea
   const day = useDay()
   const zone = day.snapshot()?.event.timeZone ?? 'UTC'
   return (
-    <ul className="grid grid-cols-2 gap-3" aria-label="The looks that differ">
+    <ul className={heads.length > 1 ? 'grid grid-cols-2 gap-3' : 'grid'} aria-label="The looks that differ">
       {heads.map((head) => (
         <li key={head.hash} className="border-2 border-line p-3 wrap-anywhere">
           <p className="flex items-center gap-2 text-xl font-bold">

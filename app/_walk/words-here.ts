@@ -11,6 +11,6 @@ export function wordsHere(day: DayClient, against: Against, { book, state }: Wal
   const zone = snapshot?.event.timeZone ?? 'UTC'
   const { record, at, actor } = against
   const isToday = record.day === day.status().day
-  const since = `since ${isToday ? '' : `${dayWords(record.day)}, `}${clockTime(at, zone)}, by ${crewName(day, actor)}`
+  const since = `${against.state === 'waiting' ? 'said' : 'since'} ${isToday ? '' : `${dayWords(record.day)}, `}${clockTime(at, zone)}, by ${crewName(day, actor)}`
   return { ...againstWords(against, state, book, snapshot ?? { groups: [], event: { timeZone: zone } }), since }
 }

@@ -6,6 +6,8 @@ import { correctedAt, standsAgainst, type Against } from '@/lib/inspection/stand
 import type { SubjectState } from '@/lib/inspection/state'
 import { subjectKey, type SubjectKey } from '@/lib/inspection/subject'
 import { againstWords } from '@/lib/pass/against-words'
+import { civilDate } from '@/lib/rules/civil-date'
+import { dateInWords } from '@/lib/rules/date-in-words'
 import type { TriggerNames } from '@/lib/pass/trigger-words'
 import { typedCode } from '@/lib/pass/typed-code'
 import type { HoldsReading } from './holds-reading'
@@ -104,13 +106,14 @@ function dispensationsOf(
     .of('dispensation')
     .map(({ hash, record }) => {
       const stands = state.checks.get(record.check)?.dispensation?.hash === hash
-      const until = record.until === null ? 'to the event’s end' : `to the end of ${record.until}`
+      const until = record.until === null ? 'to the event’s end' : `to the end of ${dateInWords(civilDate(record.until))}`
+      const check = book?.byId.get(record.check)
       return {
         ...about,
         id: hash,
         kind: 'dispensation' as const,
         state: stands ? ('standing' as const) : ('ended' as const),
-        what: `Fail accepted ${until}, ${book?.byId.get(record.check)?.short ?? record.check}. Only with: ${record.conditions}. Because: ${record.reason}`,
+        what: `Fail accepted ${until} (${check?.short ?? record.check}). Only with: ${record.conditions}. Because: ${record.reason}`,
         at: correctedAt(record),
         day: record.day,
         by: nameOf(record.actor),

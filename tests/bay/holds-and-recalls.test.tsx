@@ -52,7 +52,8 @@ test('[F5] only the chief makes a hold narrower: lifted, and held anew for what 
   const bay = await aBegunBay({ roles: ['chief'] })
   await one(bay.phone.day, { ...CONTACT, stations: ['body', 'seat'], subject: { car: bay.car } })
   bay.open()
-  await bay.user.type(screen.getByRole('textbox', { name: 'Lift it without a new look, because' }), 'the seat was not touched')
+  await bay.press('Lift without a new look')
+  await bay.user.type(screen.getByRole('textbox', { name: 'Why it needs no new look' }), 'the seat was not touched')
   await bay.user.click(screen.getByRole('checkbox', { name: 'Body' }))
   await bay.press('Lift it, and hold it for less')
 
@@ -71,7 +72,7 @@ test('[F13] a recall is made with when and what; it waits, visible to all, and i
   await bay.press('Recall it')
 
   const coming = await screen.findByRole('region', { name: 'To be shown again' })
-  expect(coming).toHaveTextContent('Recall: to be shown after session 1 of A, since 07:30, by Crew 1.1')
+  expect(coming).toHaveTextContent('Recall: to be shown after session 1 of A, said 07:30, by Crew 1.1')
   expect(bay.state().verdict).toBe('passed')
 
   const marshal = await another(bay, ['marshal'])
