@@ -5,19 +5,8 @@ import { compareNumbers } from './compare-numbers'
 export const ENTRY_COLUMNS = ['number', 'plate', 'car', 'colour', 'group', 'driver', 'verdict'] as const
 export type EntryColumn = (typeof ENTRY_COLUMNS)[number]
 
-export interface EntrySort {
-  readonly column: EntryColumn
-  readonly descending: boolean
-}
-
-/** Rows in the order asked for; what is equal stays in order of number. Verdicts go from the one that passes to the one that stops. */
-export function sortRows(rows: readonly BoardRow[], { column, descending }: EntrySort, groupOrder: readonly string[]): readonly BoardRow[] {
-  const compare = comparing(column, groupOrder)
-  const turn = descending ? -1 : 1
-  return rows.toSorted((a, b) => turn * compare(a, b) || compareNumbers(a.number, b.number))
-}
-
-function comparing(column: EntryColumn, groupOrder: readonly string[]): (a: BoardRow, b: BoardRow) => number {
+/** How two rows stand to each other by a column. Verdicts go from the one that passes to the one that stops. */
+export function compareRows(column: EntryColumn, groupOrder: readonly string[]): (a: BoardRow, b: BoardRow) => number {
   const byText = (read: (row: BoardRow) => string) => (a: BoardRow, b: BoardRow) => compareText(read(a), read(b))
   switch (column) {
     case 'number':

@@ -1,3 +1,4 @@
+import { resolve } from 'node:path'
 import type { Browser, Page } from 'playwright-core'
 import { afterAll, beforeAll, expect, test } from 'vitest'
 import { axeFindings } from '../support/axe'
@@ -33,11 +34,20 @@ test.each(THEMES)('axe finds nothing on the office’s pages in %s', async (them
     const signIn = await lookAt(page, 'sign-in', theme, page.getByRole('button', { name: 'Sign in' }))
     await signInOn(page, seeded.server.origin, { email: 'organiser@marram.example', password: seeded.password }, `${at}/board`)
     const board = await lookAt(page, 'board', theme, page.getByRole('region', { name: 'Novice' }))
+    await page.goto(`${seeded.server.origin}${at}/entries`)
+    const entries = await lookAt(page, 'entries', theme, page.getByRole('table'))
+    await page
+      .getByRole('link', { name: /^Entry / })
+      .first()
+      .click()
+    const entry = await lookAt(page, 'entry', theme, page.getByRole('heading', { name: 'What became of it' }))
     await page.goto(`${seeded.server.origin}${at}/import`)
     const list = await lookAt(page, 'import', theme, page.getByText('No list chosen'))
+    await page.getByLabel('Choose an entry list').setInputFiles(resolve(import.meta.dirname, '../fixtures/entries-messy.csv'))
+    const asked = await lookAt(page, 'import, asked', theme, page.getByRole('heading', { name: /questions$/ }))
     await page.goto(`${seeded.server.origin}${at}/people`)
     const people = await lookAt(page, 'people', theme, page.getByRole('table'))
-    return [...signIn, ...board, ...list, ...people]
+    return [...signIn, ...board, ...entries, ...entry, ...list, ...asked, ...people]
   })
 
   expect(found).toEqual([])

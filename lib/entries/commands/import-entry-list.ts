@@ -10,6 +10,7 @@ import type { Deps } from '@/lib/platform/command'
 import { announce } from '@/lib/platform/live'
 import { isRefusal, refuse, type Refusal } from '@/lib/platform/refusal'
 import { sha256 } from '@/lib/platform/sha256'
+import { foldWord } from '../entry-row'
 import { planList, type ListPlan } from '../plan-list'
 import { existingEntries } from '../queries/existing-entries'
 import { readEntryList, type EntryList } from '../read-entry-list'
@@ -84,6 +85,7 @@ function describe(
 ): Answer {
   const planned = [...plan.add, ...plan.change.map((change) => change.planned)]
   const known = new Set(groups)
+  const open = new Set(questions.filter(({ answer }) => answer === null).map(({ id }) => id))
   // What is open comes first: with very many of them the answered ones are left off, not those that wait.
   const shown = [...questions.filter(({ answer }) => answer === null), ...questions.filter(({ answer }) => answer !== null)].slice(0, SHOWN)
   const order = new Map(questions.map(({ id }, index) => [id, index]))
@@ -110,7 +112,7 @@ function describe(
     problemCount: problems.length,
     remarks: remarks.slice(0, SHOWN),
     remarkCount: remarks.length,
-    newGroups: [...new Set(planned.map(({ group }) => group))].filter((name) => !known.has(name)),
+    newGroups: [...new Set(planned.map(({ group }) => group))].filter((name) => !known.has(name) && !open.has(`group:${foldWord(name)}`)),
     planHash,
     tookMs,
   }

@@ -1,6 +1,7 @@
 import type { Metadata } from 'next'
 import { notFound } from 'next/navigation'
 import { readBoard } from '@/lib/board/queries/see-board'
+import { seeMissing } from '@/lib/entries/queries/see-missing'
 import { can } from '@/lib/permissions/policy'
 import { now } from '@/lib/platform/clock'
 import { servedDatabase } from '@/lib/platform/served-database'
@@ -19,7 +20,12 @@ export default async function EntriesPage({ params }: { readonly params: Promise
   return (
     <EventFrame guarded={guarded} tab="entries" width="wide">
       <DeclarationsSummary eventId={guarded.event.id} />
-      <EntriesScreen eventId={guarded.event.id} first={board} mayImport={can(guarded.roles, 'entries:import')} />
+      <EntriesScreen
+        eventId={guarded.event.id}
+        first={board}
+        missing={seeMissing(servedDatabase(), guarded.event.id)}
+        mayImport={can(guarded.roles, 'entries:import')}
+      />
     </EventFrame>
   )
 }

@@ -26,7 +26,9 @@ export function ImportColumns({ desk, plan }: { readonly desk: ImportDesk; reado
   return (
     <details open={plan.columnsNeeded || undefined} className="border-2 p-4">
       <summary className="target flex flex-wrap items-center gap-x-3">
-        <span className="heading text-2xl">{plan.columnsNeeded ? 'Say what the columns are' : 'How the list was read'}</span>
+        <span className="heading text-2xl text-accent underline underline-offset-4">
+          {plan.columnsNeeded ? 'Say what the columns are' : 'How the list was read'}
+        </span>
         <span className="text-muted">
           {plan.encoding === null ? '' : ENCODINGS[plan.encoding]}, {SEPARATORS[plan.separator] ?? plan.separator}, headings in row{' '}
           {plan.headingRow}
@@ -37,7 +39,7 @@ export function ImportColumns({ desk, plan }: { readonly desk: ImportDesk; reado
           Not every column says plainly what it is. Look at what was guessed, put it right and go on; nothing is read as certain before.
         </p>
       )}
-      <div className="mt-4 grid gap-4 sm:grid-cols-2">
+      <div className="mt-4 grid items-end gap-4 sm:grid-cols-2">
         <SelectField
           label="Letters are written in"
           value={plan.encoding ?? 'utf-8'}

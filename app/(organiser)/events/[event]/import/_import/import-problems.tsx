@@ -60,7 +60,11 @@ function ProblemRow({
       <Th scope="row">{row}</Th>
       <Td className="whitespace-nowrap">{column === '' ? 'whole row' : column}</Td>
       <Td className="max-w-60 break-words">
-        {value === '' ? <span className="text-muted">empty</span> : <span className="serial">{value}</span>}
+        {value === '' ? (
+          <span className="text-muted">empty</span>
+        ) : (
+          <span className="serial">{value.length > 60 ? `${value.slice(0, 60)}…` : value}</span>
+        )}
       </Td>
       <Td className="min-w-56">{why}</Td>
       <Td>

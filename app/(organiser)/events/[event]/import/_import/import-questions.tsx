@@ -1,3 +1,4 @@
+import { Button } from '@/app/_ui/button'
 import { Choice } from '@/app/_ui/choice'
 import type { ImportAnswer, ListAnswer } from './import-words'
 import type { ImportDesk } from './use-import'
@@ -26,13 +27,19 @@ export function ImportQuestions({
         )}
       </div>
       {questions.map((question) => (
-        <Asked key={question.id} desk={desk} question={question} />
+        <Asked key={question.id} desk={desk} question={question} questions={questions} />
       ))}
     </section>
   )
 }
 
-function Asked({ desk, question }: { readonly desk: ImportDesk; readonly question: Question }) {
+interface AskedProps {
+  readonly desk: ImportDesk
+  readonly question: Question
+  readonly questions: readonly Question[]
+}
+
+function Asked({ desk, question, questions }: AskedProps) {
   const { id, asks, rows, options, likely, does, answer } = question
   const said = desk.said.answers.find((one) => one.id === id)
   const set = (value: string, text: string) =>
@@ -74,6 +81,7 @@ function Asked({ desk, question }: { readonly desk: ImportDesk; readonly questio
           </div>
         ))}
       </div>
+      <SameForAll desk={desk} questions={questions} question={question} />
       {does !== '' && !isLate && <p className="mt-2 border-l-8 border-accent pl-3">{does}</p>}
       {answer === null && said !== undefined && !desk.isChanged && (
         <p role="alert" className="mt-2 border-l-8 border-line pl-3 font-bold">
@@ -81,6 +89,30 @@ function Asked({ desk, question }: { readonly desk: ImportDesk; readonly questio
         </p>
       )}
     </fieldset>
+  )
+}
+
+/** With a list of another numbering dozens are asked the same; nobody should press the same answer thirty times, nor have it pressed for them. */
+function SameForAll({ desk, question, questions }: AskedProps) {
+  const said = desk.said.answers.find(({ id }) => id === question.id)
+  const option = question.options.find(({ value }) => value === said?.value)
+  if (said === undefined || option?.asks !== null) return null
+  const kind = question.id.split(':')[0]
+  const answered = new Set(desk.said.answers.map(({ id }) => id))
+  const others = questions.filter(
+    ({ id, options }) =>
+      id.split(':')[0] === kind && !answered.has(id) && options.some(({ value, asks }) => value === said.value && asks === null),
+  )
+  if (others.length < 2) return null
+  return (
+    <Button
+      look="quiet"
+      onClick={() =>
+        desk.say((before) => ({ ...before, answers: others.reduce((all, { id }) => withAnswer(all, { ...said, id }), before.answers) }))
+      }
+    >
+      Answer the other {others.length} of this kind the same way
+    </Button>
   )
 }
 
