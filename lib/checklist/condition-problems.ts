@@ -24,7 +24,8 @@ function problemsOf(condition: Condition, path: string, subject: JudgedKind, dra
   if (declared === undefined) return [{ path, problem: `there is no fact ${condition.fact}` }]
   const fact = declared.value
   if (fact === null) return []
-  if (fact.subject !== subject)
+  // A fit is a person in a car: it may ask about either.
+  if (fact.subject !== subject && subject !== 'fit')
     return [{ path, problem: `the fact ${fact.name} is about a ${fact.subject}, the condition about a ${subject}` }]
   return valueProblems(condition, path, fact)
 }
