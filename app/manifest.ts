@@ -20,6 +20,7 @@ export default function manifest(): MetadataRoute.Manifest {
     shortcuts: [
       { name: 'Bay', url: '/bay' },
       { name: 'Pit exit', url: '/pit-exit' },
+      { name: 'Sign-on', url: '/sign-on' },
     ],
   }
 }

@@ -18,6 +18,9 @@ export default function HomePage() {
         <HardLink className={buttonClass('secondary')} href="/bay">
           Bay
         </HardLink>
+        <HardLink className={buttonClass('secondary')} href="/sign-on">
+          Sign-on
+        </HardLink>
         <HardLink className={buttonClass('secondary')} href="/pit-exit">
           Pit exit
         </HardLink>

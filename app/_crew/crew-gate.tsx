@@ -16,7 +16,7 @@ import { UnlockScreen } from './unlock-screen'
 const EnrolScreen = lazy(() => import('./enrol-screen').then((module) => ({ default: module.EnrolScreen })))
 
 interface CrewGateProps {
-  readonly post: 'bay' | 'pit-exit'
+  readonly post: 'bay' | 'pit-exit' | 'sign-on'
   readonly children: ReactNode
 }
 

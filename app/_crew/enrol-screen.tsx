@@ -6,8 +6,10 @@ import { EmptyState } from '@/app/_ui/empty-state'
 import { EnrolForm } from './enrol-form'
 import { findChances, type Chance } from './find-chances'
 
+const TITLES = { bay: 'A device for the bay', 'pit-exit': 'A device for the pit exit', 'sign-on': 'A device for sign-on' } as const
+
 /** Makes this browser a crew device: its key is made here and never leaves it. Needs the network once. */
-export function EnrolScreen({ post }: { readonly post: 'bay' | 'pit-exit' }) {
+export function EnrolScreen({ post }: { readonly post: keyof typeof TITLES }) {
   const [chances, setChances] = useState<readonly Chance[] | null>(null)
   useEffect(() => {
     let cancelled = false
@@ -24,7 +26,7 @@ export function EnrolScreen({ post }: { readonly post: 'bay' | 'pit-exit' }) {
     )
   return (
     <main className="mx-auto grid w-full max-w-3xl gap-4 p-4">
-      <h1 className="text-xl">{post === 'bay' ? 'A device for the bay' : 'A device for the pit exit'}</h1>
+      <h1 className="text-xl">{TITLES[post]}</h1>
       {chances.length > 0 ? (
         <EnrolForm chances={chances} />
       ) : (

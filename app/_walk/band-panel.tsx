@@ -6,6 +6,7 @@ import { ProblemNotice } from '@/app/_crew/problem-notice'
 import { useAction } from '@/app/_crew/use-action'
 import { Button } from '@/app/_ui/button'
 import { OutcomeShape } from '@/app/_ui/outcome-shape'
+import { showTypedCode, typedCode } from '@/lib/pass/typed-code'
 import { subjectKey } from '@/lib/inspection/subject'
 import { can } from '@/lib/permissions/policy'
 import { useDayStatus } from '@/lib/sync/client/use-day'
@@ -24,6 +25,11 @@ export function BandPanel({ walk }: { readonly walk: Walk }) {
       {band && (
         <p className="flex items-center gap-3 text-xl font-bold">
           <OutcomeShape state="ok" className="size-8" /> Band {band.bandNumber}
+        </p>
+      )}
+      {band && (
+        <p className="text-muted">
+          Its code: <span className="serial">{showTypedCode(typedCode(band.token))}</span>
         </p>
       )}
       {can(unlocked?.roles ?? [], 'record:band') ? (

@@ -25,8 +25,9 @@ interface SubjectWalkProps {
 
 /** One subject's walk from above: the wire, the verdict, what is open, where to go on, and the pass or band when it is earned. */
 export function SubjectWalk({ walk, base, told, undo }: SubjectWalkProps) {
-  const [changing, setChanging] = useState(false)
   const { book, state } = walk
+  // Somebody told of at a briefing has not said yet what they wear: that is asked before the walk goes on.
+  const [changing, setChanging] = useState(() => lacksFacts(walk))
   if (!book)
     return (
       <Notice
@@ -56,4 +57,10 @@ export function SubjectWalk({ walk, base, told, undo }: SubjectWalkProps) {
       {undo.done !== null && <UndoBar done={undo.done} onUndo={takeBack} />}
     </div>
   )
+}
+
+/** Whether the facts that are pinned of a person leave out one that the checklist asks. */
+function lacksFacts({ subject, book, facts }: Walk): boolean {
+  if (!('person' in subject) || book === null || facts === null) return false
+  return book.checklist.facts.some(({ name, subject: kind }) => kind === 'person' && (facts[name] ?? null) === null)
 }

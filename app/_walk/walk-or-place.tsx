@@ -26,7 +26,7 @@ export function WalkOrPlace({ subject, base, place, told }: WalkOrPlaceProps) {
   if (here) return <PlaceScreen key={place} walk={walk} here={here} base={base} undo={undo} />
   return (
     <Notice
-      happened="Nothing is asked at this place for this car."
+      happened={`Nothing is asked at this place for this ${'car' in subject ? 'car' : 'person'}.`}
       todo="Go back to its places."
       actions={<Button onClick={() => goTo(base)}>All places</Button>}
       className="m-4"

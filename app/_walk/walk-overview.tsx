@@ -9,6 +9,7 @@ import { recallWalk } from '@/lib/walk/walk-memory'
 import { resumeStop } from '@/lib/walk/next-stop'
 import { BandPanel } from './band-panel'
 import { livePass } from './live-pass'
+import { NotYet } from './not-yet'
 import { NoGoAgain } from './no-go-again'
 import { OpenDefects } from './open-defects'
 import { openStop } from './open-stop'
@@ -43,7 +44,7 @@ export function WalkOverview({ walk, base, onChange }: WalkOverviewProps) {
       )}
       {(next === null || isPassed) && !isLive && <NoGoAgain plan={plan} onPick={(stop) => openStop(subject, base, stop)} />}
       <OpenDefects walk={walk} base={base} />
-      {isPassed && ('car' in subject ? <PassPanel walk={walk} /> : <BandPanel walk={walk} />)}
+      {isPassed ? 'car' in subject ? <PassPanel walk={walk} /> : <BandPanel walk={walk} /> : <NotYet walk={walk} />}
       <PlaceList plan={plan} base={base} />
       {next && (
         <Button size="large" onClick={() => openStop(subject, base, next)}>

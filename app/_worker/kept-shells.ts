@@ -1,5 +1,5 @@
 /** Pages that the worker fetches once, without anybody's sign-in, and answers with offline. Each must be the same for everybody. */
-export const SHELLS = ['/bay', '/pit-exit', '/offline'] as const
+export const SHELLS = ['/bay', '/pit-exit', '/sign-on', '/offline'] as const
 
 export type Shell = (typeof SHELLS)[number]
 

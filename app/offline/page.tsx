@@ -23,6 +23,9 @@ export default async function OfflinePage() {
         <HardLink className={buttonClass('primary')} href="/pit-exit">
           Pit exit
         </HardLink>
+        <HardLink className={buttonClass('primary')} href="/sign-on">
+          Sign-on
+        </HardLink>
         <TryAgain />
       </nav>
     </main>

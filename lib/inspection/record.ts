@@ -190,6 +190,13 @@ const day = z.strictObject({
   ]),
 })
 
+const seat = z.strictObject({
+  person: id,
+  role: z.enum(['driver', 'passenger', 'instructor']),
+  /** Under age, as told at the desk; null where nobody asked, as with somebody who is known already. */
+  minor: z.nullable(z.boolean()),
+})
+
 const entryChanged = z.strictObject({
   ...envelope,
   kind: z.literal('entry-changed'),
@@ -201,9 +208,17 @@ const entryChanged = z.strictObject({
     z.strictObject({ what: z.literal('number'), number: z.string().check(z.maxLength(12)) }),
     z.strictObject({ what: z.literal('plate'), plateTail: z.string().check(z.maxLength(6)) }),
     z.strictObject({ what: z.literal('group'), group: id }),
-    z.strictObject({ what: z.literal('people'), added: z.array(id), removed: z.array(id), passengers: z.array(id) }),
+    z.strictObject({
+      what: z.literal('people'),
+      added: z.array(id),
+      removed: z.array(id),
+      passengers: z.array(id),
+      /** Who was seated at the desk, one a record. Where the person is new, the record's one note is the name: names never stand in a record. */
+      seated: z.optional(seat),
+    }),
     z.strictObject({ what: z.literal('facts') }),
   ]),
+  notes: z.optional(hashes),
 })
 
 const adopted = z.strictObject({
@@ -244,6 +259,7 @@ export type RecordOf<K extends RecordKind> = z.infer<(typeof RECORD_KINDS)[K]>
 export type KnownRecord = { [K in RecordKind]: RecordOf<K> }[RecordKind]
 
 export type FindingOutcome = RecordOf<'finding'>['outcome']
+export type Seated = z.infer<typeof seat>
 export type RecallTrigger = RecordOf<'recall'>['trigger']
 
 /** A record of a kind this build does not know: only its envelope and its effect are read (rule T3). */

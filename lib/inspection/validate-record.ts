@@ -1,7 +1,7 @@
 import * as z from 'zod/mini'
 import { parseCivilDate } from '@/lib/rules/civil-date'
 import { findingEffect } from './finding-effect'
-import { RECORD_KINDS, RECORD_VERSION, type AnyRecord, type KnownRecord, type RecordKind, type UnknownRecord } from './record'
+import { RECORD_KINDS, RECORD_VERSION, type AnyRecord, type KnownRecord, type RecordKind, type Seated, type UnknownRecord } from './record'
 
 export type ParsedRecord = { readonly ok: true; readonly record: AnyRecord } | { readonly ok: false; readonly problem: string }
 
@@ -86,10 +86,30 @@ function contradictionInFinding(record: Extract<KnownRecord, { kind: 'finding' }
 }
 
 function contradictionInChange(record: Extract<KnownRecord, { kind: 'entry-changed' }>): string | null {
-  const { what } = record.change
+  const { change, notes = [] } = record
+  const { what } = change
+  const seat = what === 'people' ? change.seated : undefined
+  // The only free text of a change is the name of who is seated; anything else has nowhere to stand.
+  if (notes.length > (seat === undefined ? 0 : 1)) return 'notes: a change names at most the one who is seated'
+  if (what === 'people' && seat !== undefined) return contradictionInSeat(seat, change) ?? permitsNothing(record)
   if (what === 'withdrawn') return effectProblem(record.effect, 'stops', 'a withdrawal')
   if (what === 'returned') return effectProblem(record.effect, 'permits', 'a return')
-  return record.effect === 'permits' ? `effect: a change of ${what} cannot say permits` : null
+  return permitsNothing(record)
+}
+
+function permitsNothing({ effect, change }: Extract<KnownRecord, { kind: 'entry-changed' }>): string | null {
+  return effect === 'permits' ? `effect: a change of ${change.what} cannot say permits` : null
+}
+
+/** Who is seated is the one who was added, and counts as a passenger exactly when they ride as one (rule F13 waits for it). */
+function contradictionInSeat(
+  { person, role }: Seated,
+  { added, passengers }: { readonly added: readonly string[]; readonly passengers: readonly string[] },
+): string | null {
+  if (added.length !== 1 || added[0] !== person) return 'change.seated: is not the one who was added'
+  const rides = passengers.length === 1 && passengers[0] === person
+  const isRight = role === 'passenger' ? rides : passengers.length === 0
+  return isRight ? null : `change.passengers: contradicts the role of who is seated, ${role}`
 }
 
 function effectProblem(said: string, must: string, what: string): string | null {

@@ -33,7 +33,7 @@ test('the crew’s shells open with the network off and the server gone, and bre
   await server.kill()
   await context.setOffline(true)
   const answers: (readonly [string, number | undefined, boolean | undefined])[] = []
-  for (const path of ['/bay', '/bay/somewhere/deep', '/pit-exit']) {
+  for (const path of ['/bay', '/bay/somewhere/deep', '/pit-exit', '/sign-on', '/sign-on/briefing']) {
     const answer = await page.goto(server.origin + path)
     await page.waitForFunction(() => document.querySelector('main') !== null)
     answers.push([path, answer?.status(), answer?.fromServiceWorker()])
@@ -69,7 +69,7 @@ test('the worker keeps the build’s own files and the shells, nothing of anybod
   })
 
   const pages = kept.filter((path) => !/^\/(_next\/static|icons|wasm)\//.test(path)).sort()
-  expect(pages).toEqual(['/bay', '/offline', '/pit-exit', '/theme.js'])
+  expect(pages).toEqual(['/bay', '/offline', '/pit-exit', '/sign-on', '/theme.js'])
   expect(kept).toContain('/wasm/zxing_reader.wasm')
   await context.close()
 })

@@ -26,6 +26,10 @@ function changed(entry: LogEntry, change: object): unknown {
   return { ...entry.record, ...change }
 }
 
+function seated(role: 'passenger' | 'instructor', passengers: string[], added: string[] = [PERSON.person]): LogEntry {
+  return entryChanged({ what: 'people', added, removed: [], passengers, seated: { person: PERSON.person, role, minor: null } })
+}
+
 describe('parseRecord', () => {
   test.each([
     presented(),
@@ -42,6 +46,8 @@ describe('parseRecord', () => {
     day({ what: 'wet', on: true }),
     entryChanged({ what: 'withdrawn' }),
     entryChanged({ what: 'people', added: [], removed: [], passengers: [PERSON.person] }),
+    { record: changed(seated('passenger', [PERSON.person]), { notes: ['a'.repeat(64)] }) as LogEntry['record'] },
+    seated('instructor', []),
     adopted(fail),
     comment(),
   ])('a $record.kind is read as it was made', ({ record }) => {
@@ -81,6 +87,22 @@ describe('parseRecord', () => {
       'a new number that permits',
       changed(entryChanged({ what: 'number', number: '7' }), { effect: 'permits' }),
       'effect: a change of number cannot say permits',
+    ],
+    [
+      'a passenger who is not counted as one',
+      seated('passenger', []).record,
+      'change.passengers: contradicts the role of who is seated, passenger',
+    ],
+    [
+      'an instructor counted as a passenger',
+      seated('instructor', [PERSON.person]).record,
+      'change.passengers: contradicts the role of who is seated, instructor',
+    ],
+    ['a seat of another than who was added', seated('instructor', [], []).record, 'change.seated: is not the one who was added'],
+    [
+      'a note on a change that names nobody',
+      changed(entryChanged({ what: 'withdrawn' }), { notes: ['a'.repeat(64)] }),
+      'notes: a change names at most the one who is seated',
     ],
     ['a dispensation of nothing', dispensation('a.b', null, {}).record, 'basis: a dispensation names the fail it accepts'],
     ['an unseen of nothing', finding('a.b', 'unseen').record, 'basis: an unseen names the finding it takes back'],

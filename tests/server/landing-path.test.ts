@@ -30,7 +30,8 @@ test('who runs the event is led to its board, crew to their post, an entrant to 
 
   expect(led('organiser')).toBe(`/events/${event}/board`)
   expect(led('admin')).toBe(`/events/${event}/board`)
-  expect([led('chief'), led('scrutineer'), led('helper'), led('sign-on')]).toEqual(['/bay', '/bay', '/bay', '/bay'])
+  expect([led('chief'), led('scrutineer'), led('helper')]).toEqual(['/bay', '/bay', '/bay'])
+  expect(led('sign-on')).toBe('/sign-on')
   expect(led('marshal')).toBe('/pit-exit')
   expect(led('entrant')).toBe('/cars')
 })

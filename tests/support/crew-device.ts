@@ -3,7 +3,7 @@ import type { Page } from 'playwright-core'
 export interface EnrolledAs {
   readonly email: string
   readonly password: string
-  readonly post: 'bay' | 'pit-exit'
+  readonly post: 'bay' | 'pit-exit' | 'sign-on'
   /** What the organiser sees as the device's name. */
   readonly device: string
 }
@@ -45,7 +45,7 @@ export async function waitForOfflineShells(page: Page): Promise<void> {
   await page.evaluate(() => navigator.serviceWorker.ready)
   await page.waitForFunction(() => navigator.serviceWorker.controller !== null)
   await page.waitForFunction(async () => {
-    const kept = await Promise.all(['/bay', '/pit-exit'].map((path) => caches.match(path, { ignoreVary: true })))
+    const kept = await Promise.all(['/bay', '/pit-exit', '/sign-on'].map((path) => caches.match(path, { ignoreVary: true })))
     return kept.every((answer) => answer !== undefined)
   })
 }

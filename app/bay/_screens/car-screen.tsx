@@ -19,7 +19,12 @@ interface CarScreenProps {
 
 /** One car: its number first, then the two tabs of its walk, the car and the kit of each who sits in it. */
 export function CarScreen({ entry, rest }: CarScreenProps) {
-  const car = useSubjectState(useDay(), `car:${entry.id}`)
+  const day = useDay()
+  const car = useSubjectState(day, `car:${entry.id}`)
+  const minorOf = (id: string) => {
+    const known = day.snapshot()?.people.find((one) => one.id === id)
+    return known ? { minor: known.minor } : {}
+  }
   const base = `/bay/car/${entry.id}`
   const person = rest[0] === 'person' ? (rest[1] ?? null) : null
   const place = (person === null ? rest[0] : rest[2]) ?? null
@@ -39,7 +44,7 @@ export function CarScreen({ entry, rest }: CarScreenProps) {
           subject={{ person }}
           base={`${base}/person/${person}`}
           place={place}
-          told={toldOfPerson(car.presentedHeads[0]?.record.facts.roof)}
+          told={{ ...toldOfPerson(car.presentedHeads[0]?.record.facts.roof), ...minorOf(person) }}
         />
       )}
       {place === null && <CarActs entry={entry} subject={person === null ? { car: entry.id } : { person }} />}

@@ -8,7 +8,7 @@ import { venueDay } from '@/lib/rules/venue-day'
 import { nearestEvent } from '../nearest-event'
 import { myEvents } from './describe-me'
 
-/** Where somebody's work is once they are signed in: the board for who runs the event, bay or pit exit for its crew. */
+/** Where somebody's work is once they are signed in: the board for who runs the event, bay, sign-on or pit exit for its crew. */
 export function landingPath(database: Db, actor: AccountActor, now: number): string {
   const zones = new Map(
     database
@@ -26,5 +26,7 @@ export function landingPath(database: Db, actor: AccountActor, now: number): str
 
 function placeOf(roles: readonly Role[], eventId: string): string {
   if (can(roles, 'event:edit')) return `/events/${eventId}/board`
-  return roles.every((role) => role === 'marshal' || role === 'entrant') ? '/pit-exit' : '/bay'
+  const crew = roles.filter((role) => role !== 'entrant')
+  if (crew.every((role) => role === 'marshal')) return '/pit-exit'
+  return crew.every((role) => role === 'sign-on') ? '/sign-on' : '/bay'
 }

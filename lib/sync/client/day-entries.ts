@@ -1,6 +1,7 @@
 import type { DaySnapshot } from '@/lib/contracts/day-snapshot'
 import { subjectKey, type Subject } from '@/lib/inspection/subject'
 import { entryNow } from '../core/entry-now'
+import { peopleNow } from '../core/people-now'
 import type { DayEntry } from './day-client'
 import type { DayMemory } from './day-memory'
 
@@ -41,11 +42,13 @@ export function dayEntries(memory: DayMemory, day: () => string): DayEntries {
     const records = memory.log(key).map(({ record, disposition }) => ({ record, quarantined: disposition.state === 'quarantined' }))
     const changed = entryNow(entry, records)
     const withdrawn = entry.withdrawn || memory.state(key, day()).withdrawn
+    const people = peopleNow(entry.people, records)
     return {
       ...changed,
+      people: [...people],
       withdrawn,
       groupName: groups.get(changed.group) ?? '',
-      changedHere: changed !== entry || withdrawn !== entry.withdrawn,
+      changedHere: changed !== entry || people !== entry.people || withdrawn !== entry.withdrawn,
     }
   }
 

@@ -2,7 +2,7 @@ import type { Book } from '@/lib/checklist/book'
 import type { DaySnapshot } from '@/lib/contracts/day-snapshot'
 import { foldSubject } from '@/lib/inspection/fold-subject'
 import type { LogEntry } from '@/lib/inspection/log-entry'
-import { isKnown, type AnyRecord } from '@/lib/inspection/record'
+import { isKnown, type AnyRecord, type RecordOf } from '@/lib/inspection/record'
 import type { FoldContext, SubjectState } from '@/lib/inspection/state'
 import { subjectKey, type SubjectKey } from '@/lib/inspection/subject'
 import { logEntryOf, sendingOrder, type StoredRecord } from '../core/held-record'
@@ -21,6 +21,8 @@ export interface DayMemory {
   readonly state: (key: SubjectKey, day: string) => SubjectState
   /** Whether a record held here names this photograph. */
   readonly namesPhoto: (hash: string) => boolean
+  /** Records that seated somebody who was new: their names are notes. The same list until another comes. */
+  readonly newcomers: () => readonly RecordOf<'entry-changed'>[]
   /** Moves on with each change of this subject or of the event itself. */
   readonly versionOf: (key: SubjectKey) => string
   readonly book: (checklistHash: string, limitsHash: string) => Book | null
@@ -42,6 +44,8 @@ export function dayMemory(): DayMemory {
   const folded = new Map<SubjectKey, { readonly tag: string; readonly state: SubjectState }>()
   const books = new Map<string, Book | null>()
   const photos = new Set<string>()
+  let newcomers: ReadonlyMap<string, RecordOf<'entry-changed'>> = new Map()
+  let newcomersRead: readonly RecordOf<'entry-changed'>[] = []
   let snapshot: DaySnapshot | null = null
   let declared: ReadonlySet<SubjectKey> = new Set()
   let snapshots = 0
@@ -61,6 +65,7 @@ export function dayMemory(): DayMemory {
       // No record at all: kept on the disk and sent on, read by nobody.
       if (entry === null) continue
       for (const hash of photosOf(entry.record)) photos.add(hash)
+      if (seatsSomebodyNew(entry.record) && !newcomers.has(record.hash)) setNewcomers(new Map(newcomers).set(record.hash, entry.record))
       const shelf = shelfOf(subjectKey(entry.record.subject))
       shelf.records.set(record.hash, { stored: record, entry })
       shelf.version += 1
@@ -68,8 +73,14 @@ export function dayMemory(): DayMemory {
     }
   }
 
+  function setNewcomers(next: ReadonlyMap<string, RecordOf<'entry-changed'>>): void {
+    newcomers = next
+    newcomersRead = [...next.values()]
+  }
+
   function remove(hash: string): void {
     stored.delete(hash)
+    if (newcomers.has(hash)) setNewcomers(new Map([...newcomers].filter(([other]) => other !== hash)))
     for (const shelf of shelves.values()) {
       if (!shelf.records.delete(hash)) continue
       shelf.version += 1
@@ -124,6 +135,7 @@ export function dayMemory(): DayMemory {
 
   function clear(): void {
     stored.clear()
+    setNewcomers(new Map())
     // The shelves stay, emptied and moved on: a fold made from them must not be taken for current.
     for (const shelf of shelves.values()) {
       shelf.records.clear()
@@ -142,10 +154,17 @@ export function dayMemory(): DayMemory {
     log,
     state,
     namesPhoto: (hash) => photos.has(hash),
+    newcomers: () => newcomersRead,
     versionOf,
     book,
     seqs,
   }
+}
+
+/** Whether somebody was seated by it who had no row yet: then its one note is their name. */
+function seatsSomebodyNew(record: AnyRecord): record is RecordOf<'entry-changed'> {
+  if (!isKnown(record) || record.kind !== 'entry-changed' || record.change.what !== 'people') return false
+  return record.change.seated !== undefined && record.notes?.length === 1
 }
 
 /** What was photographed: what a finding shows, and the sheet that was keyed in from paper. */

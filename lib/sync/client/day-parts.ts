@@ -1,3 +1,4 @@
+import type { DaySnapshot } from '@/lib/contracts/day-snapshot'
 import type { DayStatus } from './day-client'
 import type { DayDisk } from './day-disk'
 import type { DayEntries } from './day-entries'
@@ -20,6 +21,8 @@ export interface DayParts {
   readonly enrolment: Enrolment
   readonly disk: DayDisk
   readonly cars: DayEntries
+  /** The event as last loaded, with whoever was seated at the desk since. */
+  readonly snapshot: () => DaySnapshot | null
   readonly hands: Unlocking
   readonly photos: PhotoShelf
   /** Waits to be sent, and a record names it. */

@@ -9,6 +9,7 @@ export type DayProblemCode =
   | 'not-allowed'
   | 'not-loaded'
   | 'not-passed'
+  | 'band-taken'
   | 'no-key'
   | 'unreadable-draft'
   | 'offline'

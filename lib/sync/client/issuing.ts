@@ -13,12 +13,14 @@ import { signWith } from './device-key'
 import type { Draft, DraftNote } from './draft'
 import type { Enrolment } from './enrolment'
 import type { Made } from './make-records'
-import { dayError } from './problem-of'
+import { bandHolder } from './band-holder'
+import { bandTaken, dayError } from './problem-of'
 
 interface IssuingParts {
   readonly enrolment: Enrolment
   readonly memory: DayMemory
   readonly cars: DayEntries
+  readonly snapshot: DayClient['snapshot']
   readonly day: () => string
   readonly save: (draft: (nextPass: number) => Promise<readonly Draft[]>, notes: readonly DraftNote[]) => Promise<Made>
 }
@@ -27,7 +29,7 @@ interface IssuingParts {
 const MOST_DAYS = 7
 
 /** Passes and bands made on the device, offline too: each signed by its key, with the device's own counter, and saved as a record in the same transaction. */
-export function issuing({ enrolment, memory, cars, day, save }: IssuingParts): {
+export function issuing({ enrolment, memory, cars, snapshot, day, save }: IssuingParts): {
   readonly pass: DayClient['issuePass']
   readonly band: DayClient['issueBand']
 } {
@@ -92,6 +94,8 @@ export function issuing({ enrolment, memory, cars, day, save }: IssuingParts): {
         const state = memory.state(subjectKey({ person: request.person }), day())
         const number = passNumber(request.bandNumber)
         if (number === '' || number !== request.bandNumber.toUpperCase()) throw dayError('unreadable-draft')
+        const holder = bandHolder({ memory, snapshot, day }, number, request.person)
+        if (holder !== null) throw bandTaken(number, holder)
         const payload: PassPayload = { ...frame(state, counter), type: 'band', entry: 0, passengerSeatUsable: false, number, plateTail: '' }
         return { payload, draft: { kind: 'band', subject: { person: request.person }, token: await sign(payload), bandNumber: number } }
       }),

@@ -4,6 +4,7 @@ import { dayAttention } from './day-attention'
 import type { DayClient } from './day-client'
 import { dayDisk } from './day-disk'
 import { dayEntries } from './day-entries'
+import { dayPeople } from './day-people'
 import type { DayNow, DayParts } from './day-parts'
 import { daySaving } from './day-saving'
 import { dayStatus } from './day-status'
@@ -48,8 +49,23 @@ export async function openDay(store: DeviceStore, world: DayWorld): Promise<DayC
     bump()
   })
   const cars = dayEntries(disk.memory, day)
+  const snapshot = dayPeople(disk)
   const photoParts = await openPhotos(store, { disk, tools, transport, bump })
-  const parts: DayParts = { store, tools, transport, enrolment, disk, cars, hands, ...photoParts, day, bump, heard: hearing.heard, now }
+  const parts: DayParts = {
+    store,
+    tools,
+    transport,
+    enrolment,
+    disk,
+    cars,
+    snapshot,
+    hands,
+    ...photoParts,
+    day,
+    bump,
+    heard: hearing.heard,
+    now,
+  }
   return {
     ...assemble(parts, world),
     subscribe: (listener) => {
@@ -81,16 +97,16 @@ async function openPhotos(store: DeviceStore, { disk, tools, transport, bump }: 
 }
 
 function assemble(parts: DayParts, world: DayWorld): Omit<DayClient, 'subscribe' | 'close'> {
-  const { disk, cars, hands, day, now, enrolment } = parts
+  const { disk, cars, snapshot, hands, day, now, enrolment } = parts
   const { memory } = disk
   const save = daySaving(parts)
-  const issue = issuing({ enrolment, memory, cars, day, save })
+  const issue = issuing({ enrolment, memory, cars, snapshot, day, save })
   const traffic = dayTraffic(parts)
   const status = dayStatus(parts)
   return {
     version: () => now.version,
     status,
-    snapshot: memory.snapshot,
+    snapshot,
     entries: cars.all,
     entry: cars.one,
     state: (key) => memory.state(key, day()),
@@ -100,7 +116,7 @@ function assemble(parts: DayParts, world: DayWorld): Omit<DayClient, 'subscribe'
       const event = memory.snapshot()?.event
       return event === undefined ? null : memory.book(checklistHash ?? event.checklistHash, limitsHash ?? event.limitsHash)
     },
-    passList: overlaidList(disk, cars, day, () => now.version),
+    passList: overlaidList(disk, { cars, snapshot }, day, () => now.version),
     note: (hash) => disk.notes.get(hash)?.text ?? null,
     // The records come back in the order of the drafts, each of its draft's kind: what `SavedRecords` says and the compiler cannot see.
     record: async (drafts, notes = []) => (await save(async () => drafts, notes)).saved as never,

@@ -4,10 +4,15 @@ import type { ListedEntry, PassList } from '@/lib/pass/pass-list'
 import { isReflected, overlayEntry } from '../core/overlay-list'
 import type { DayEntry } from './day-client'
 import type { DayDisk } from './day-disk'
-import type { DayEntries } from './day-entries'
+import type { DayParts } from './day-parts'
 
 /** The server's list with what this device's own log knows besides; made again only when something changed. */
-export function overlaidList(disk: DayDisk, cars: DayEntries, day: () => string, version: () => number): () => PassList | null {
+export function overlaidList(
+  disk: DayDisk,
+  { cars, snapshot: read }: Pick<DayParts, 'cars' | 'snapshot'>,
+  day: () => string,
+  version: () => number,
+): () => PassList | null {
   let made: { readonly tag: string; readonly from: PassList; readonly list: PassList } | null = null
   const lines = new Map<string, { readonly tag: string; readonly from: ListedEntry; readonly line: ListedEntry }>()
 
@@ -36,7 +41,7 @@ export function overlaidList(disk: DayDisk, cars: DayEntries, day: () => string,
   }
 
   function ownLine(car: DayEntry, keys: readonly SubjectKey[]): ListedEntry {
-    const snapshot = disk.memory.snapshot()
+    const snapshot = read()
     const names = new Map(snapshot?.people.map(({ id, name }) => [id, name]) ?? [])
     const states = new Map(keys.map((key) => [key, disk.memory.state(key, day())]))
     const book = snapshot === null ? null : disk.memory.book(snapshot.event.checklistHash, snapshot.event.limitsHash)

@@ -39,6 +39,11 @@ export const DAY_PROBLEMS: Readonly<Record<DayProblemCode, Omit<DayProblem, 'cod
     kept: NOTHING_SAVED,
     todo: 'Finish the walk-round first.',
   },
+  'band-taken': {
+    what: 'A band of this number is on somebody else’s wrist today.',
+    kept: NOTHING_SAVED,
+    todo: 'Read the number on the band again, or take another band.',
+  },
   'no-key': { what: 'This device has no signing key for the event.', kept: NOTHING_SAVED, todo: 'Enrol it with a join code.' },
   'unreadable-draft': {
     what: 'What was entered is not complete or too long.',
@@ -90,6 +95,11 @@ export function dayProblem(code: DayProblemCode): DayProblem {
 
 export function dayError(code: DayProblemCode): DayError {
   return new DayError(dayProblem(code))
+}
+
+/** As `band-taken`, with the number and whose it is. */
+export function bandTaken(number: string, holder: string): DayError {
+  return new DayError({ ...dayProblem('band-taken'), what: `Band ${number} was given to ${holder} today.` })
 }
 
 /** What a failed commit means to a person. */

@@ -11,6 +11,7 @@ const STICKS: readonly Verdict[] = ['withdrawn', 'held', 'not passed']
 export function overlayEntry(listed: ListedEntry, own: ListedEntry): ListedEntry {
   const known = new Set(listed.blocks.map(({ kind, words }) => `${kind} ${words}`))
   const before = new Set(listed.passes.map(({ id }) => id))
+  const aboard = new Set(listed.people.map(({ person }) => person))
   return {
     ...listed,
     number: own.number,
@@ -20,7 +21,11 @@ export function overlayEntry(listed: ListedEntry, own: ListedEntry): ListedEntry
     verdict: STICKS.includes(listed.verdict) && !STICKS.includes(own.verdict) ? listed.verdict : own.verdict,
     blocks: [...own.blocks.filter(({ kind, words }) => !known.has(`${kind} ${words}`)), ...listed.blocks],
     passes: [...listed.passes.map((pass) => overlayPass(pass, own.passes)), ...own.passes.filter(({ id }) => !before.has(id))],
-    people: listed.people.map((person) => overlayPerson(person, own.people)),
+    // Somebody seated at the desk since: they ride, and without a band they do not.
+    people: [
+      ...listed.people.map((person) => overlayPerson(person, own.people)),
+      ...own.people.filter(({ person }) => !aboard.has(person)),
+    ],
   }
 }
 

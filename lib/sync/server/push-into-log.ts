@@ -5,6 +5,7 @@ import type { SyncPushRequest, SyncPushResponse } from '@/lib/contracts/sync-pus
 import { assert } from '@/lib/platform/assert'
 import { eventFrame } from './event-frame'
 import { dropEventLog, eventLog } from './event-log'
+import { seatPeople } from './seat-people'
 import { beginLogWork, keepNotes, takeRecord } from './take-record'
 import type { RefusedRecord, VerifiedRecord } from './verify-records'
 
@@ -37,6 +38,11 @@ export function pushIntoLog(
       const before = log.seq
       const answers = records.map((record) => (record.state === 'refused' ? refusal(record) : takeRecord(work, record)))
       keepNotes(work, notes)
+      seatPeople(
+        work,
+        records.flatMap((record, index) => (record.state === 'verified' && answers[index]?.outcome === 'stored' ? [record.record] : [])),
+        notes,
+      )
       const answered = answers.filter(({ outcome }) => outcome !== 'refused').length
       work.statements.contact.run({ at: now, unsent: Math.max(0, pusher.unsent - answered), deviceId: pusher.deviceId })
       return { answers, stored: log.seq - before }

@@ -65,16 +65,23 @@ export function JoinWait({ kept, onGone }: JoinWaitProps) {
   )
 }
 
+/** Where each role's screens are; every other role works in the bay. */
+const POSTS = {
+  marshal: { href: '/pit-exit', words: 'To the pit exit' },
+  'sign-on': { href: '/sign-on', words: 'To the sign-on desk' },
+  bay: { href: '/bay', words: 'To the bay' },
+} as const
+
 function Accepted({ kept }: { readonly kept: KeptClaim }) {
-  const isMarshal = kept.role === 'marshal'
+  const post = kept.role === 'marshal' || kept.role === 'sign-on' ? POSTS[kept.role] : POSTS.bay
   return (
     <div className="grid gap-4">
       <p role="status" className="text-xl font-bold">
         {kept.name} is accepted as {kept.role}
       </p>
       <p>Next this device is enrolled in your name and the day is loaded on it, while there is signal.</p>
-      <HardLink className={buttonClass('primary', 'large')} href={isMarshal ? '/pit-exit' : '/bay'}>
-        {isMarshal ? 'To the pit exit' : 'To the bay'}
+      <HardLink className={buttonClass('primary', 'large')} href={post.href}>
+        {post.words}
       </HardLink>
     </div>
   )
