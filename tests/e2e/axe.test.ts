@@ -95,6 +95,31 @@ test.each(THEMES)('axe finds nothing at the pit exit in %s, and nothing is wider
   expect(pit.complaints()).toEqual([])
 })
 
+test.each(THEMES)('axe finds nothing on the entrant’s pages in %s, and nothing is wider than a phone', async (theme) => {
+  const entrant = await open(`entrant in ${theme}`, theme, { width: 360, height: 800 })
+  const { page } = entrant
+  const found = await step('the entrant’s pages are looked through', [entrant], async () => {
+    await page.goto(`${seeded.server.origin}/entry/${'A'.repeat(43)}`)
+    const link = await lookAt(page, 'link', theme, page.getByRole('alert'))
+    await signInOn(page, seeded.server.origin, { email: 'entrant@marram.example', password: seeded.password }, '/cars')
+    const cars = await lookAt(page, 'cars', theme, page.getByRole('button', { name: 'Add a car' }))
+    await page.getByRole('link', { name: /RE41/ }).click()
+    const car = await lookAt(page, 'car', theme, page.getByRole('button', { name: 'Keep it' }))
+    await page.goto(`${seeded.server.origin}/kit`)
+    await page.getByRole('button', { name: 'Change White full face' }).click()
+    const kit = await lookAt(page, 'kit', theme, page.getByRole('button', { name: 'Put it away' }))
+    await page.goto(`${seeded.server.origin}/cars`)
+    await page.getByRole('link', { name: /303/ }).click()
+    const entry = await lookAt(page, 'entry', theme, page.getByRole('heading', { name: 'Entry code' }))
+    await page.getByRole('link', { name: 'Declare the car' }).click()
+    const declaring = await lookAt(page, 'declaration', theme, page.getByText('As declared: would not be passed.'))
+    return [...link, ...cars, ...car, ...kit, ...entry, ...declaring]
+  })
+
+  expect(found).toEqual([])
+  expect(entrant.complaints()).toEqual([])
+})
+
 test('axe would find something: a picture without words, put on the sign-in page', async () => {
   const { page } = await open('sign-in', 'sun', { width: 360, height: 800 })
   await page.goto(`${seeded.server.origin}/sign-in`)

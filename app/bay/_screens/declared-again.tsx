@@ -15,7 +15,8 @@ export function DeclaredAgain({ entry }: { readonly entry: DayEntry }) {
   const when = declaredAt === null || zone === undefined ? '' : ` at ${clockTime(declaredAt, zone)}`
   return (
     <p role="status" className="border-l-4 border-accent px-4 py-2 font-bold">
-      Declared again{when}, after it was presented. Say anew what stands before you, and ask the driver what changed.
+      {pinned.declaration === null ? 'Declared' : 'Declared again'}
+      {when}, after it was presented. Say anew what stands before you, and ask the driver what changed.
     </p>
   )
 }
