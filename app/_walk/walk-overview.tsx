@@ -52,7 +52,7 @@ export function WalkOverview({ walk, base, onChange }: WalkOverviewProps) {
         </Button>
       )}
       <Button look="quiet" className="justify-self-start" onClick={onChange}>
-        {'car' in subject ? 'The car is otherwise than said' : 'The kit is otherwise than said'}
+        {'car' in subject ? 'The car is otherwise than said' : 'Otherwise than said'}
       </Button>
     </>
   )
