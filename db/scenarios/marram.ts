@@ -9,7 +9,7 @@ export const MARRAM = {
   timeZone: 'Europe/London',
   days: 2,
   listStaleMinutes: 30,
-  checklist: 'checklists/closed-circuit/v1.json',
+  checklist: 'checklists/closed-circuit/v2.json',
   limits: 'checklists/limits/track-day.json',
   /** On the list it is the entrant's own. */
   entrantNumber: '303',

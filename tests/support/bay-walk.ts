@@ -20,7 +20,7 @@ interface Fact {
   readonly label: string
   readonly values: readonly { readonly value: string | boolean; readonly label: string }[]
 }
-const checklist = JSON.parse(readFileSync(resolve(import.meta.dirname, '../../checklists/closed-circuit/v1.json'), 'utf8')) as {
+const checklist = JSON.parse(readFileSync(resolve(import.meta.dirname, '../../checklists/closed-circuit/v2.json'), 'utf8')) as {
   readonly facts: readonly Fact[]
   readonly checks: readonly Check[]
 }
