@@ -49,6 +49,9 @@ export function buildPassList(input: PassListInput): PassList {
 /** One entry's line of the list; also what a device overlays with its own log. */
 export function listEntry(entry: EntryForList, input: Pick<PassListInput, 'states' | 'names' | 'book' | 'day'>): ListedEntry {
   const state = input.states.get(subjectKey({ car: entry.id })) ?? null
+  // What the scrutineer saw stands above what the entry said; before anybody has seen it, what nobody said may be anything.
+  const pinned = state?.presentedHeads.map(({ record }) => record.facts) ?? []
+  const facts = pinned.length === 0 ? [entry.facts] : pinned
   const verdict: Verdict = entry.withdrawn ? 'withdrawn' : (state?.verdict ?? 'not presented')
   return {
     entry: entry.id,
@@ -67,7 +70,7 @@ export function listEntry(entry: EntryForList, input: Pick<PassListInput, 'state
       const own = input.states.get(subjectKey({ person })) ?? null
       const fit = input.states.get(subjectKey({ fit: entry.id, person })) ?? null
       const name = input.names.get(person) ?? 'somebody without a name'
-      return listPerson({ person, role, name, state: own, blocks: own ? blocksOf(own, input.book) : [], fit }, entry.facts, input)
+      return listPerson({ person, role, name, state: own, blocks: own ? blocksOf(own, input.book) : [], fit }, facts, input)
     }),
   }
 }

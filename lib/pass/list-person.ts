@@ -17,8 +17,15 @@ export interface PersonForList {
   readonly fit: SubjectState | null
 }
 
-/** A person's line under a car: band and fit as rule P8 wants them, and why there is none. */
-export function listPerson(who: PersonForList, facts: CarFacts, on: { readonly day: string; readonly book: Book | null }): ListedPerson {
+/**
+ * A person's line under a car: band and fit as rule P8 wants them, and why there is none. `facts` are those of each `presented` of the car, before one
+ * those of its entry: a fit is asked where any of them asks for it.
+ */
+export function listPerson(
+  who: PersonForList,
+  facts: readonly CarFacts[],
+  on: { readonly day: string; readonly book: Book | null },
+): ListedPerson {
   const bands = (who.state?.passes ?? []).filter(({ record }) => record.kind === 'band')
   const ofToday = bands.filter((band) => coversDay(band, on.day))
   const live = ofToday.findLast(({ state }) => state === 'live')
@@ -56,10 +63,10 @@ function coversDay({ record }: PassState, day: string): boolean {
   return decoded.ok && decoded.token.payload.type === 'band' && isValidOn(decoded.token.payload, day)
 }
 
-function fitOf(state: SubjectState | null, facts: CarFacts, book: Book | null): ListedPerson['fit'] {
+function fitOf(state: SubjectState | null, facts: readonly CarFacts[], book: Book | null): ListedPerson['fit'] {
   if (state && state.fails.length > 0) return 'failed'
   if (state && state.blocks.length === 0 && hasPassed(state)) return 'passed'
   if (state && (state.blocks.length > 0 || state.presentedHeads.length > 0)) return 'open'
   if (book === null) return 'open'
-  return applicableChecks(book, 'fit', facts).some((check) => check.required) ? 'open' : 'not-asked'
+  return facts.some((one) => applicableChecks(book, 'fit', one).some((check) => check.required)) ? 'open' : 'not-asked'
 }
