@@ -24,7 +24,7 @@ export function DeclaredHere({ subject, check }: DeclaredHereProps) {
     <div className="mt-3 border-l-4 border-line pl-3">
       <p>
         <span className="text-muted">Declared: </span>
-        <span className="serial">{words === '' ? 'a photograph' : words}</span>
+        <span className="font-bold">{words === '' ? 'a photograph' : words}</span>
       </p>
       {photos.length > 0 && (
         <div className="mt-2 flex flex-wrap gap-2">

@@ -41,11 +41,6 @@ export function preChecksOf(database: Db, own: typeof event.$inferSelect, book: 
     .map((row) => rowOf(row, aboard.get(row.id) ?? [], signed.get(row.id) ?? null, own.lastDay, book))
 }
 
-/** The pre-check of one entry; null where there is none. */
-export function preCheckOf(database: Db, own: typeof event.$inferSelect, book: Book, entryId: string): Row | null {
-  return preChecksOf(database, own, book).find((row) => row.entry === entryId) ?? null
-}
-
 interface Driver {
   readonly id: string
   readonly name: string

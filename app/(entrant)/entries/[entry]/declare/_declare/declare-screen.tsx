@@ -82,7 +82,7 @@ export function DeclareScreen({ declaring }: { readonly declaring: Declaring }) 
       ))}
       {statements.length > 0 && (
         <details className="border-t-[3px] pt-3">
-          <summary className="heading cursor-pointer py-3 text-2xl marker:text-base">
+          <summary className="heading cursor-pointer py-3 text-2xl text-accent underline underline-offset-4">
             Worth a look before you travel ({statements.length})
           </summary>
           <p className="pb-3 text-muted">

@@ -32,7 +32,9 @@ export function DeclarationsSummary({ eventId }: { readonly eventId: string }) {
       </p>
       {failing.length > 0 && (
         <details>
-          <summary className="target flex cursor-pointer items-center font-bold">What would not be passed</summary>
+          <summary className="target flex cursor-pointer items-center font-bold text-accent underline underline-offset-4">
+            What would not be passed
+          </summary>
           <ul className="grid gap-2">
             {failing.map((row) => (
               <Failing key={row.entry} row={row} />
@@ -42,7 +44,9 @@ export function DeclarationsSummary({ eventId }: { readonly eventId: string }) {
       )}
       {silent.length > 0 && (
         <details>
-          <summary className="target flex cursor-pointer items-center font-bold">Who has not declared ({silent.length})</summary>
+          <summary className="target flex cursor-pointer items-center font-bold text-accent underline underline-offset-4">
+            Who has not declared ({silent.length})
+          </summary>
           <p className="figures text-xl">
             {silent
               .slice(0, NAMED_AT_MOST)
