@@ -3,6 +3,7 @@ import type { Board, BoardGroup, BoardRow } from '@/lib/contracts/board'
 import type { SubjectState } from '@/lib/inspection/state'
 import { subjectKey } from '@/lib/inspection/subject'
 import { wireSentence, wireStations } from '@/lib/inspection/wire'
+import { bandToday } from '@/lib/pass/live-band'
 import { compareNumbers } from './compare-numbers'
 import { firstSessionOn, forecastOf, morningOf, type TimetableLine } from './forecast-of'
 import type { DayReading } from './day-reading'
@@ -42,10 +43,17 @@ export function boardOf(event: EventFacts, reading: DayReading, at: number): Boa
   const rows = event.entries
     .map((entry) => rowOf(entry, reading, book))
     .toSorted((a, b) => place(a) - place(b) || compareNumbers(a.number, b.number))
+  const groupOf = new Map(rows.map(({ id, group }) => [id, group]))
+  const left = new Set(rows.filter(({ verdict }) => verdict === 'withdrawn').map(({ id }) => id))
+  const running = event.entries.filter(({ id }) => !left.has(id))
   const groups = event.groups.map((group) => ({
     ...group,
     firstSessionAt: firstSessionOn(reading.day, group.id, event.timetable),
     ...countsOf(rows.filter((row) => row.group === group.id)),
+    ...peopleOf(
+      running.filter((entry) => groupOf.get(entry.id) === group.id),
+      reading,
+    ),
   }))
   const mornings = rows
     .filter(({ verdict }) => verdict !== 'withdrawn')
@@ -70,6 +78,13 @@ export function isPassed({ verdict }: Pick<BoardRow, 'verdict'>): boolean {
 function countsOf(rows: readonly BoardRow[]): Pick<BoardGroup, 'entries' | 'passed'> {
   const running = rows.filter(({ verdict }) => verdict !== 'withdrawn')
   return { entries: running.length, passed: running.filter(isPassed).length }
+}
+
+/** Who is to sit in these cars, each counted once, and who of them may. */
+function peopleOf(entries: readonly EntryFacts[], reading: DayReading): Pick<BoardGroup, 'people' | 'banded'> {
+  const people = new Set(entries.flatMap((entry) => entry.people.map(({ id }) => id)))
+  const banded = [...people].filter((person) => bandToday(reading.stateOf(subjectKey({ person })), reading.day) !== null)
+  return { people: people.size, banded: banded.length }
 }
 
 function rowOf(entry: EntryFacts, reading: DayReading, book: Book | null): BoardRow {

@@ -44,6 +44,9 @@ const boardGroup = z.object({
   /** Entries that are not withdrawn, and how many of them pass, with or without advisories. */
   entries: z.int(),
   passed: z.int(),
+  /** Everybody who sits in one of those entries, and how many of them wear a band that counts today. */
+  people: z.int(),
+  banded: z.int(),
   /** At the pace of this morning: when its last car is through, and whether that is before its own first session. Nothing is promised. */
   forecast: z.object({
     is: z.enum(['all through', 'in time', 'late', 'too early to say']),

@@ -1,6 +1,6 @@
 import type { SubjectState } from '@/lib/inspection/state'
-import { hasPassed, isValidOn } from '@/lib/pass/may-run'
-import { decodeToken } from '@/lib/pass/token'
+import { bandToday } from '@/lib/pass/live-band'
+import { hasPassed } from '@/lib/pass/may-run'
 
 /** How somebody stands at the desk today. `banded` alone may sit in a car. */
 export type DeskStanding =
@@ -16,14 +16,8 @@ export type DeskStanding =
 export function deskStanding(state: SubjectState, day: string): DeskStanding {
   if (state.blocks.length > 0) return { is: 'stopped', why: 'held' }
   if (state.fails.length > 0) return { is: 'stopped', why: 'not passed' }
-  const band = state.passes.findLast(
-    ({ state: stands, record }) => stands === 'live' && record.kind === 'band' && coversDay(record.token, day),
-  )
-  if (hasPassed(state)) return band?.record.kind === 'band' ? { is: 'banded', band: band.record.bandNumber } : { is: 'ready' }
+  const band = bandToday(state, day)
+  if (band !== null) return { is: 'banded', band }
+  if (hasPassed(state)) return { is: 'ready' }
   return state.presentedHeads.length === 0 ? { is: 'not begun' } : { is: 'begun', toSee: state.open.length }
-}
-
-function coversDay(token: string, day: string): boolean {
-  const decoded = decodeToken(token)
-  return decoded.ok && decoded.token.payload.type === 'band' && isValidOn(decoded.token.payload, day)
 }

@@ -120,6 +120,29 @@ test.each(THEMES)('axe finds nothing on the entrant’s pages in %s, and nothing
   expect(entrant.complaints()).toEqual([])
 })
 
+test.each(THEMES)('axe finds nothing at the sign-on desk in %s, and nothing is wider than a phone', async (theme) => {
+  const desk = await open(`desk in ${theme}`, theme, { width: 360, height: 800 })
+  const { page } = desk
+  const found = await step('the desk is looked through', [desk], async () => {
+    const as = { email: 'sign-on@marram.example', password: seeded.password, post: 'sign-on', device: `desk in ${theme}` } as const
+    await becomeCrewDevice(page, seeded.server.origin, as)
+    const home = await lookAt(page, 'sign-on', theme, page.getByRole('heading', { name: 'Still missing' }))
+    await page.getByRole('button', { name: 'Who was at a briefing' }).click()
+    const briefing = await lookAt(page, 'briefing', theme, page.getByRole('heading', { name: 'Who was at a briefing' }))
+    await page.getByRole('button', { name: 'Back to sign-on' }).click()
+    await page.getByRole('button', { name: 'Somebody turned up' }).click()
+    const turnedUp = await lookAt(page, 'turned up', theme, page.getByRole('heading', { name: 'Somebody turned up' }))
+    await page.getByRole('button', { name: 'Back to sign-on' }).click()
+    await page.getByLabel('Name, car number or plate').fill('263')
+    await page.keyboard.press('Enter')
+    const person = await lookAt(page, 'person', theme, page.getByRole('button', { name: 'Begin' }))
+    return [...home, ...briefing, ...turnedUp, ...person]
+  })
+
+  expect(found).toEqual([])
+  expect(desk.complaints()).toEqual([])
+})
+
 test('axe would find something: a picture without words, put on the sign-in page', async () => {
   const { page } = await open('sign-in', 'sun', { width: 360, height: 800 })
   await page.goto(`${seeded.server.origin}/sign-in`)

@@ -7,7 +7,8 @@ import { newId } from '@/lib/platform/ids'
 import { isRefusal } from '@/lib/platform/refusal'
 import { describeSticker } from '@/lib/public-pass/queries/describe-sticker'
 import { dayReading } from '@/lib/sync/server/day-reading'
-import { aSyncPaddock, PIN, type SyncPaddock } from '../support/sync-paddock'
+import { NAME_REF, seatDrafts } from '@/lib/desk/seat-drafts'
+import { aSyncPaddock, CHECKLIST_HASH, LIMITS_HASH, PIN, type SyncPaddock } from '../support/sync-paddock'
 import { finds, one, presents, seesAll } from '../support/sync-walk'
 
 const DAY_MS = 86_400_000
@@ -50,6 +51,26 @@ describe('the board on the server', () => {
       ['47', 'OT11 KLM', ['Driver 1'], 'not presented'],
       ['48', 'OT12 KLM', ['Driver 2'], 'not presented'],
     ])
+  })
+
+  test('[P8] each group says how many of its people are banded, whoever was seated at the desk among them; one who fails since is not', async () => {
+    const paddock = await aSyncPaddock()
+    const desk = await paddock.phone(['sign-on'])
+    await desk.day.loadDay()
+    const [car, driver] = [paddock.cars[0] as string, paddock.drivers[0] as string]
+    const lio = { person: newId(), role: 'passenger', minor: false, isNew: true, cars: [car] } as const
+    await desk.day.record(seatDrafts(lio), [{ ref: NAME_REF, text: 'Lio Brandt' }])
+    const pins = { checklist: CHECKLIST_HASH, limits: LIMITS_HASH, declaration: null, facts: {}, depth: 'standard' } as const
+    await one(desk.day, { kind: 'presented', subject: { person: driver }, ...pins })
+    const label = { kind: 'finding', subject: { person: driver }, check: 'helmet.label' } as const
+    await one(desk.day, { ...label, outcome: 'ok' })
+    await desk.day.issueBand({ person: driver, bandNumber: '112' })
+    await desk.day.drain()
+
+    expect(await boardOf(paddock)).toMatchObject({ groups: [{ people: 3, banded: 1 }] })
+    await one(desk.day, { ...label, outcome: 'fail' })
+    await desk.day.drain()
+    expect(await boardOf(paddock)).toMatchObject({ groups: [{ people: 3, banded: 0 }] })
   })
 
   test('it tells no address and no telephone of anybody', async () => {

@@ -27,7 +27,7 @@ export function BriefingScreen({ desk }: { readonly desk: Desk }) {
   const [typed, setTyped] = useState('')
   const [query, setQuery] = useState('')
   const [ticked, setTicked] = useState<ReadonlySet<string>>(new Set())
-  const time = times.length === 0 || picked === OTHER ? typed : (times.find(({ label }) => label === picked)?.time ?? '')
+  const time = times.length === 0 || picked === OTHER ? typedTime(typed) : (times.find(({ label }) => label === picked)?.time ?? '')
   const shown = query.trim() === '' ? people : searchPeople(people, query)
   const chosen = people.filter(({ id, briefing }) => briefing === 'open' && ticked.has(id)).length
   const send = () => void save(ticked, time).then((isSaved) => isSaved && setTicked(new Set()))
@@ -56,7 +56,11 @@ export function BriefingScreen({ desk }: { readonly desk: Desk }) {
             <label className="grid gap-1">
               <span className="font-bold">Time of the briefing</span>
               <input
-                type="time"
+                // Not the browser's own clock field: where its language says so, that one writes 8:15 AM.
+                inputMode="numeric"
+                placeholder="08:15"
+                maxLength={5}
+                autoComplete="off"
                 className="target rounded-sm border border-line bg-ground px-3 text-xl"
                 value={typed}
                 onChange={(event) => setTyped(event.target.value)}
@@ -88,4 +92,10 @@ export function BriefingScreen({ desk }: { readonly desk: Desk }) {
       </Button>
     </main>
   )
+}
+
+/** `8:15`, `0815` and `08.15` are 08:15; what is no time of a day is empty. */
+function typedTime(typed: string): string {
+  const [, hours = '', minutes = ''] = /^(\d{1,2})[:.]?(\d{2})$/.exec(typed.trim()) ?? []
+  return hours !== '' && Number(hours) < 24 && Number(minutes) < 60 ? `${hours.padStart(2, '0')}:${minutes}` : ''
 }

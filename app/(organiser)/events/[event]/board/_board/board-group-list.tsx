@@ -25,6 +25,9 @@ export function BoardGroupList({ group, rows, board }: BoardGroupListProps) {
           {forecastWords(group, board.timeZone)}
         </p>
       </div>
+      <p className="text-muted">
+        Sign-on: {group.banded} of {group.people} banded{group.banded < group.people && `, ${group.people - group.banded} missing`}
+      </p>
       <ul>
         {rows.map((row) => (
           <BoardLine key={row.id} row={row} stations={board.stations} />
