@@ -48,6 +48,8 @@ test('the crew’s shells open with the network off and the server gone, and bre
     ['/bay', 200, true],
     ['/bay/somewhere/deep', 200, true],
     ['/pit-exit', 200, true],
+    ['/sign-on', 200, true],
+    ['/sign-on/briefing', 200, true],
   ])
   expect(elsewhere?.fromServiceWorker()).toBe(true)
   expect(words).toBe('This page needs the network')

@@ -127,6 +127,24 @@ test('a band number that somebody else was given today is refused with their nam
   await desk.day.issueBand({ person: first, bandNumber: '112' })
 })
 
+test('somebody of another event is not drawn into this one, and what was typed as a name keeps no sign that turns a line around', async () => {
+  const { paddock, desk, car } = await aDesk()
+  const stranger = newId()
+  paddock.change((database) => {
+    const own = database.select().from(tables.event).where(eq(tables.event.id, paddock.event)).get()
+    if (own === undefined) throw new Error('the event is gone')
+    const other = { ...own, id: newId(), code: 8 }
+    database.insert(tables.event).values(other).run()
+    database.insert(tables.person).values({ id: stranger, clubId: own.clubId, eventId: other.id, name: 'Canary' }).run()
+  })
+  await turnsUp(desk, [car], { person: stranger, isNew: false, minor: null })
+  const person = await turnsUp(desk, [car], { name: ' Ana\u202e\u0007  Brand ' })
+  await desk.day.drain()
+  const seated = paddock.database().select().from(tables.entryPerson).where(eq(tables.entryPerson.entryId, car)).all()
+  expect(seated.map(({ personId }) => personId).sort()).toEqual([paddock.drivers[0], person].sort())
+  expect(paddock.database().select().from(tables.person).where(eq(tables.person.id, person)).get()?.name).toBe('Ana Brand')
+})
+
 const PAPERS = ['helmet.label', 'papers.licence', 'papers.indemnity', 'papers.briefing']
 
 const presentsPerson = (phone: Phone, person: string, facts: Record<string, boolean>) => presentsTo(phone, { person }, facts)
