@@ -65,7 +65,7 @@ test('an instructor in three cars is one person in three cars, and one band lets
   expect(aboard(desk, car).filter((seat) => seat.startsWith(person))).toHaveLength(1)
 })
 
-test('[F13] a passenger who is added makes the recall before a passenger due, and the pass of the car dies with it', async () => {
+test('a passenger who is added makes the recall before a passenger due, and the pass of the car dies with it', async () => {
   const { desk, bay, car } = await aDesk()
   await presentsTo(bay, { car }, { cage: false, slicks: false })
   await seesAll(bay.day, car)
