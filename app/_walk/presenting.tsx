@@ -7,9 +7,13 @@ import { Button } from '@/app/_ui/button'
 import type { Book } from '@/lib/checklist/book'
 import type { CarFacts } from '@/lib/checklist/car-facts'
 import type { Depth } from '@/lib/checklist/checklist'
+import { judgedKind } from '@/lib/inspection/subject'
 import type { DayProblem } from '@/lib/sync/client/day-problem'
 import { FactsForm } from './facts-form'
 import type { Walk } from './use-walk'
+
+/** A fit is asked by what the car is: nothing of its own has to be said first. */
+const HEADINGS = { car: 'What stands before you', person: 'Who stands before you', fit: 'In the seat, belts tight, helmet on' } as const
 
 interface PresentingProps {
   readonly walk: Walk
@@ -31,18 +35,24 @@ export function Presenting({ walk, book, told, onDone }: PresentingProps) {
     const pins = { checklist: event.checklistHash, limits: event.limitsHash, declaration }
     if (await act(() => day.record([{ kind: 'presented', subject, ...pins, facts, depth }]))) onDone?.()
   }
-  const kind = 'car' in subject ? 'car' : 'person'
+  const kind = judgedKind(subject)
   return (
     <section className="grid gap-3">
-      <h2 className="text-lg">{kind === 'car' ? 'What stands before you' : 'Who stands before you'}</h2>
-      <FactsForm
-        book={book}
-        kind={kind}
-        known={walk.facts ?? told}
-        depth={walk.depth ?? event?.defaultDepth ?? 'standard'}
-        busy={busy}
-        onPresent={(facts, depth) => void present(facts, depth)}
-      />
+      <h2 className="text-lg">{HEADINGS[kind]}</h2>
+      {kind === 'fit' ? (
+        <Button size="large" isBusy={busy} onClick={() => void present(told, event?.defaultDepth ?? 'standard')}>
+          Begin
+        </Button>
+      ) : (
+        <FactsForm
+          book={book}
+          kind={kind}
+          known={walk.facts ?? told}
+          depth={walk.depth ?? event?.defaultDepth ?? 'standard'}
+          busy={busy}
+          onPresent={(facts, depth) => void present(facts, depth)}
+        />
+      )}
       <ProblemNotice problem={problem && wordsFor(problem, onDone !== null)} />
       {onDone && (
         <Button look="quiet" className="justify-self-start" onClick={onDone}>

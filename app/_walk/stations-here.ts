@@ -1,7 +1,7 @@
 import { factsPinned } from '@/app/_crew/facts-pinned'
 import { applicableChecks } from '@/lib/checklist/applicable-checks'
 import type { Station } from '@/lib/checklist/checklist'
-import { subjectKey } from '@/lib/inspection/subject'
+import { judgedKind, subjectKey } from '@/lib/inspection/subject'
 import type { DayClient } from '@/lib/sync/client/day-client'
 import type { WalkSubject } from './use-walk'
 
@@ -10,7 +10,7 @@ export function stationsHere(day: DayClient, subject: WalkSubject): readonly Sta
   const told = 'car' in subject ? (day.entry(subject.car)?.facts ?? {}) : {}
   const { book, facts } = factsPinned(day, subjectKey(subject), told)
   if (book === null) return []
-  const kind = 'car' in subject ? 'car' : 'person'
+  const kind = judgedKind(subject)
   const known = new Set(facts.flatMap((one) => applicableChecks(book, kind, one).map(({ station }) => station)))
   return book.checklist.stations.filter(({ id }) => known.has(id))
 }

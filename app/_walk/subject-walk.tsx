@@ -5,6 +5,7 @@ import { ProblemNotice } from '@/app/_crew/problem-notice'
 import { Notice } from '@/app/_ui/notice'
 import { UndoBar } from '@/app/_ui/undo-bar'
 import type { CarFacts } from '@/lib/checklist/car-facts'
+import { judgedKind } from '@/lib/inspection/subject'
 import { BlockList } from './block-list'
 import { ForTheChief } from './for-the-chief'
 import { openStop } from './open-stop'
@@ -61,6 +62,6 @@ export function SubjectWalk({ walk, base, told, undo }: SubjectWalkProps) {
 
 /** Whether the facts that are pinned of a person leave out one that the checklist asks. */
 function lacksFacts({ subject, book, facts }: Walk): boolean {
-  if (!('person' in subject) || book === null || facts === null) return false
+  if (judgedKind(subject) !== 'person' || book === null || facts === null) return false
   return book.checklist.facts.some(({ name, subject: kind }) => kind === 'person' && (facts[name] ?? null) === null)
 }

@@ -5,14 +5,14 @@ import { useDay } from '@/app/_crew/day-context'
 import { askedChecks } from '@/lib/checklist/applicable-checks'
 import type { Book } from '@/lib/checklist/book'
 import type { CarFacts } from '@/lib/checklist/car-facts'
-import type { Depth } from '@/lib/checklist/checklist'
+import type { Depth, JudgedKind } from '@/lib/checklist/checklist'
 import type { SubjectState } from '@/lib/inspection/state'
-import { subjectKey, type Subject } from '@/lib/inspection/subject'
+import { judgedKind, subjectKey, type Subject } from '@/lib/inspection/subject'
 import type { DayClient } from '@/lib/sync/client/day-client'
 import { useDayStatus, useSubjectState } from '@/lib/sync/client/use-day'
 import { planWalk, type WalkPlace } from '@/lib/walk/walk-plan'
 
-export type WalkSubject = Exclude<Subject, { event: string } | { fit: string }>
+export type WalkSubject = Exclude<Subject, { event: string }>
 
 /** One subject's walk: how it stands, what is asked and where. */
 export interface Walk {
@@ -27,7 +27,7 @@ export interface Walk {
   readonly lastDay: string
 }
 
-/** The walk of a car or a person, drawn again when its records change. */
+/** The walk of a car, a person or a fit, drawn again when its records change. */
 export function useWalk(subject: WalkSubject): Walk {
   const day = useDay()
   const key = subjectKey(subject)
@@ -38,7 +38,7 @@ export function useWalk(subject: WalkSubject): Walk {
   return useMemo(() => walkOf(day, subject), [day, key, state, status.event?.lastDay, status.day])
 }
 
-/** The walk of a car or a person as it stands at this moment. */
+/** The walk of a car, a person or a fit as it stands at this moment. */
 export function walkOf(day: DayClient, subject: WalkSubject): Walk {
   const state = day.state(subjectKey(subject))
   const status = day.status()
@@ -50,13 +50,13 @@ export function walkOf(day: DayClient, subject: WalkSubject): Walk {
     book,
     facts: head?.facts ?? null,
     depth: state.depth,
-    plan: book ? planWalk(book.checklist.places, book.checks, askedOf('car' in subject ? 'car' : 'person', state, book), state.checks) : [],
+    plan: book ? planWalk(book.checklist.places, book.checks, askedOf(judgedKind(subject), state, book), state.checks) : [],
     lastDay: status.event?.lastDay ?? status.day,
   }
 }
 
 /** All that any of the `presented` asks (rule F12). */
-function askedOf(kind: 'car' | 'person', state: SubjectState, book: Book): ReadonlySet<string> {
+function askedOf(kind: JudgedKind, state: SubjectState, book: Book): ReadonlySet<string> {
   const asked = state.presentedHeads.flatMap(({ record }) => askedChecks(book, kind, record.facts, record.depth))
   return new Set(asked.map((check) => check.id))
 }

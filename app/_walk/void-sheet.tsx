@@ -22,7 +22,8 @@ export function VoidSheet({ walk, pass, onClose }: VoidSheetProps) {
   const [reason, setReason] = useState('')
   const { record } = pass
   const zone = day.snapshot()?.event.timeZone ?? 'UTC'
-  const subject = 'car' in walk.subject ? { car: walk.subject.car } : { person: walk.subject.person }
+  // A fit has neither pass nor band (rule F14).
+  const subject = 'car' in walk.subject ? walk.subject : { person: walk.subject.person }
   return (
     <ChiefSheet
       title={record.kind === 'band' ? `Void band ${record.bandNumber}` : 'Void its pass'}

@@ -4,6 +4,7 @@ import { goTo } from '@/app/_crew/use-location'
 import { Button } from '@/app/_ui/button'
 import { Notice } from '@/app/_ui/notice'
 import type { CarFacts } from '@/lib/checklist/car-facts'
+import { judgedKind } from '@/lib/inspection/subject'
 import { PlaceScreen } from './place-screen'
 import { SubjectWalk } from './subject-walk'
 import { useUndo } from './use-undo'
@@ -26,7 +27,7 @@ export function WalkOrPlace({ subject, base, place, told }: WalkOrPlaceProps) {
   if (here) return <PlaceScreen key={place} walk={walk} here={here} base={base} undo={undo} />
   return (
     <Notice
-      happened={`Nothing is asked at this place for this ${'car' in subject ? 'car' : 'person'}.`}
+      happened={`Nothing is asked at this place for this ${judgedKind(subject)}.`}
       todo="Go back to its places."
       actions={<Button onClick={() => goTo(base)}>All places</Button>}
       className="m-4"

@@ -4,7 +4,7 @@ import { useDay } from '@/app/_crew/day-context'
 import { ago } from '@/app/_crew/say-when'
 import { useMinute } from '@/app/_crew/use-minute'
 import { Button } from '@/app/_ui/button'
-import { subjectKey } from '@/lib/inspection/subject'
+import { judgedKind, subjectKey } from '@/lib/inspection/subject'
 import { recallWalk } from '@/lib/walk/walk-memory'
 import { resumeStop } from '@/lib/walk/next-stop'
 import { BandPanel } from './band-panel'
@@ -44,7 +44,7 @@ export function WalkOverview({ walk, base, onChange }: WalkOverviewProps) {
       )}
       {(next === null || isPassed) && !isLive && <NoGoAgain plan={plan} onPick={(stop) => openStop(subject, base, stop)} />}
       <OpenDefects walk={walk} base={base} />
-      {isPassed ? 'car' in subject ? <PassPanel walk={walk} /> : <BandPanel walk={walk} /> : <NotYet walk={walk} />}
+      {isPassed ? <Earned walk={walk} /> : <NotYet walk={walk} />}
       <PlaceList plan={plan} base={base} />
       {next && (
         <Button size="large" onClick={() => openStop(subject, base, next)}>
@@ -52,8 +52,21 @@ export function WalkOverview({ walk, base, onChange }: WalkOverviewProps) {
         </Button>
       )}
       <Button look="quiet" className="justify-self-start" onClick={onChange}>
-        {'car' in subject ? 'The car is otherwise than said' : 'Otherwise than said'}
+        {OTHERWISE[judgedKind(subject)]}
       </Button>
     </>
+  )
+}
+
+const OTHERWISE = { car: 'The car is otherwise than said', person: 'Otherwise than said', fit: 'The car has become another' } as const
+
+/** What a walk that has passed leads to. A fit earns nothing of its own: it lets this person drive this car (rule F14). */
+function Earned({ walk }: { readonly walk: Walk }) {
+  const kind = judgedKind(walk.subject)
+  if (kind === 'car') return <PassPanel walk={walk} />
+  return kind === 'person' ? (
+    <BandPanel walk={walk} />
+  ) : (
+    <p className="font-bold">Fits this car. With a band and the car’s pass they may drive it.</p>
   )
 }

@@ -15,6 +15,12 @@ export function subjectKind(subject: Subject): SubjectKind {
   return 'event'
 }
 
+/** The kind of a subject that is judged. */
+export function judgedKind(subject: Exclude<Subject, { event: string }>): Exclude<SubjectKind, 'event'> {
+  if ('car' in subject) return 'car'
+  return 'fit' in subject ? 'fit' : 'person'
+}
+
 /** The key of a subject, for maps and for the database. */
 export function subjectKey(subject: Subject): SubjectKey {
   if ('car' in subject) return `car:${subject.car}`

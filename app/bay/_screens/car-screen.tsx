@@ -1,8 +1,10 @@
 'use client'
 
 import { useDay } from '@/app/_crew/day-context'
+import { factsPinned } from '@/app/_crew/facts-pinned'
 import { goTo } from '@/app/_crew/use-location'
 import { Button } from '@/app/_ui/button'
+import { applicableChecks } from '@/lib/checklist/applicable-checks'
 import type { DayEntry } from '@/lib/sync/client/day-client'
 import { useSubjectState } from '@/lib/sync/client/use-day'
 import { CarActs } from './car-acts'
@@ -13,7 +15,7 @@ import { WalkOrPlace } from '@/app/_walk/walk-or-place'
 
 interface CarScreenProps {
   readonly entry: DayEntry
-  /** What the address says below `/bay/car/<entry>`: nothing, a place, or `person/<id>` and a place. */
+  /** What the address says below `/bay/car/<entry>`: nothing, a place, or `person/<id>` or `fit/<id>` and a place. */
   readonly rest: readonly string[]
 }
 
@@ -26,18 +28,31 @@ export function CarScreen({ entry, rest }: CarScreenProps) {
     return known ? { minor: known.minor } : {}
   }
   const base = `/bay/car/${entry.id}`
-  const person = rest[0] === 'person' ? (rest[1] ?? null) : null
+  const isFit = rest[0] === 'fit'
+  const person = rest[0] === 'person' || isFit ? (rest[1] ?? null) : null
+  const { facts } = factsPinned(day, `car:${entry.id}`, entry.facts)
+  const book = day.book()
+  // Before the car has been presented nobody knows what it is; then the fit waits, as its pass does.
+  const asksFit = book !== null && car.presentedHeads.length > 0 && facts.some((one) => applicableChecks(book, 'fit', one).length > 0)
   const place = (person === null ? rest[0] : rest[2]) ?? null
   return (
     <main className="flex grow flex-col">
       <CarHeader entry={entry} isCompact={place !== null} />
-      <CarTabs entry={entry} base={base} person={person} />
+      <CarTabs entry={entry} base={base} person={person} isFit={isFit} asksFit={asksFit} />
       {entry.note !== '' && person === null && place === null && (
         <p className="border-l-4 border-accent px-4 py-2">Said on the entry: {entry.note}</p>
       )}
       {person === null && place === null && <DeclaredAgain entry={entry} />}
       {person === null ? (
         <WalkOrPlace key={entry.id} subject={{ car: entry.id }} base={base} place={place} told={entry.facts} />
+      ) : isFit ? (
+        <WalkOrPlace
+          key={`fit ${person}`}
+          subject={{ fit: entry.id, person }}
+          base={`${base}/fit/${person}`}
+          place={place}
+          told={facts.at(-1) ?? {}}
+        />
       ) : (
         <WalkOrPlace
           key={person}
@@ -47,7 +62,9 @@ export function CarScreen({ entry, rest }: CarScreenProps) {
           told={{ ...toldOfPerson(car.presentedHeads[0]?.record.facts.roof), ...minorOf(person) }}
         />
       )}
-      {place === null && <CarActs entry={entry} subject={person === null ? { car: entry.id } : { person }} />}
+      {place === null && (
+        <CarActs entry={entry} subject={person === null ? { car: entry.id } : isFit ? { fit: entry.id, person } : { person }} />
+      )}
       <div className="px-4 pb-6">
         <Button look="quiet" onClick={() => goTo('/bay')}>
           Another car

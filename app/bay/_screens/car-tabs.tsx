@@ -5,12 +5,15 @@ import type { DayEntry } from '@/lib/sync/client/day-client'
 interface CarTabsProps {
   readonly entry: DayEntry
   readonly base: string
-  /** Whose kit is shown; null for the car. */
+  /** Whose kit or fit is shown; null for the car. */
   readonly person: string | null
+  readonly isFit: boolean
+  /** Whether this car asks how each driver sits in it. */
+  readonly asksFit: boolean
 }
 
-/** The car, and the helmet and kit of each who sits in it. Each has an address of its own, so these lead on like links. */
-export function CarTabs({ entry, base, person }: CarTabsProps) {
+/** The car, the helmet and kit of each who sits in it, and where it matters how they sit. Each has an address of its own, so these lead on like links. */
+export function CarTabs({ entry, base, person, isFit, asksFit }: CarTabsProps) {
   const names = new Map(
     useDay()
       .snapshot()
@@ -23,10 +26,14 @@ export function CarTabs({ entry, base, person }: CarTabsProps) {
         <Tab
           key={id}
           label={`Helmet & kit: ${names.get(id) ?? 'unnamed'}${role === 'driver' ? '' : ` (${role})`}`}
-          isHere={person === id}
+          isHere={person === id && !isFit}
           to={`${base}/person/${id}`}
         />
       ))}
+      {asksFit &&
+        entry.people.map(({ person: id }) => (
+          <Tab key={`fit ${id}`} label={`Fit: ${names.get(id) ?? 'unnamed'}`} isHere={person === id && isFit} to={`${base}/fit/${id}`} />
+        ))}
     </nav>
   )
 }
