@@ -107,7 +107,7 @@ export async function saved(bay: Bay, check: string, count = 1): Promise<RecordO
   return bay.findings(check).at(-1) as RecordOf<'finding'>
 }
 
-const shipped: unknown = JSON.parse(readFileSync(resolve(import.meta.dirname, '../../checklists/closed-circuit/v1.json'), 'utf8'))
+const shipped: unknown = JSON.parse(readFileSync(resolve(import.meta.dirname, '../../checklists/closed-circuit/v2.json'), 'utf8'))
 const shippedHash = hashJson(shipped)
 
 function ship(paddock: SyncPaddock): void {
