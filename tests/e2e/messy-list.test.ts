@@ -74,7 +74,7 @@ test('columns that are not sure are said by hand before anything is read', async
   await step('the list is chosen', [office], async () => {
     await page.goto(`${seeded.server.origin}/events/${event}/import`)
     await choose(page, { name: 'anmeldung.csv', mimeType: 'text/csv', buffer: Buffer.from(list) })
-    await page.getByText('Say what the columns are').waitFor()
+    await page.getByText('Say what the columns are', { exact: true }).waitFor()
   })
   expect(await page.getByRole('button', { name: /^Import/ }).count()).toBe(0)
   await step('it is mapped', [office], async () => {
@@ -139,8 +139,17 @@ async function answer(page: Page, asks: string, option: string): Promise<void> {
 /** Finds it by its number, goes to it by the keyboard and opens it. */
 async function openEntry(page: Page, number: string): Promise<void> {
   await page.goto(`${seeded.server.origin}/events/${event}/entries`)
-  await page.getByLabel('Find').fill(number)
-  await page.getByText('1 of 95 entries').waitFor()
+  // What is typed before the page is alive is not heard: typed again until it is.
+  await expect
+    .poll(
+      async () => {
+        await page.getByLabel('Find').fill('')
+        await page.getByLabel('Find').fill(number)
+        return page.getByText(/^1 of \d+ entries$/).isVisible()
+      },
+      { timeout: 20_000 },
+    )
+    .toBe(true)
   await page.getByRole('link', { name: `Entry ${number}` }).focus()
   await page.keyboard.press('Enter')
   await page.getByRole('heading', { name: 'What became of it' }).waitFor()

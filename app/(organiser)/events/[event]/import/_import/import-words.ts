@@ -24,7 +24,7 @@ export type ImportStage =
   | { readonly at: 'nothing' }
   | { readonly at: 'reading'; readonly fileName: string; readonly done: number; readonly total: number }
   | { readonly at: 'unreadable'; readonly fileName: string; readonly why: string; readonly todo: string }
-  | { readonly at: 'looking'; readonly list: ChosenList; readonly sent: number; readonly total: number; readonly plan: ImportAnswer | null }
+  | { readonly at: 'looking'; readonly list: ChosenList; readonly plan: ImportAnswer | null }
   | { readonly at: 'looked'; readonly list: ChosenList; readonly plan: ImportAnswer; readonly problem: Problem | null }
   | { readonly at: 'refused'; readonly list: ChosenList; readonly problem: Problem }
   | { readonly at: 'importing'; readonly list: ChosenList; readonly plan: ImportAnswer }

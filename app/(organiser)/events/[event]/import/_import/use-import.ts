@@ -36,7 +36,7 @@ export function useImport(eventId: string) {
 
   async function look(list: ChosenList, what: Said, before: ImportAnswer | null): Promise<void> {
     const mine = ++asked.current
-    setStage({ at: 'looking', list, sent: 0, total: list.bytes, plan: before })
+    setStage({ at: 'looking', list, plan: before })
     const looked = await ask(list, what, true, '')
     // Another file was chosen meanwhile: its answer counts, not this one.
     if (asked.current !== mine) return

@@ -63,7 +63,7 @@ export function EntryPeople({ form, view, theirs }: EntryPeopleProps) {
                 <Button
                   look="secondary"
                   onClick={() => remove(index)}
-                  aria-label={`Take ${field.name === '' ? 'this person' : field.name} out of the car`}
+                  aria-label={`Take out ${field.name === '' ? 'this person' : field.name}`}
                 >
                   Take out
                 </Button>
