@@ -2,7 +2,7 @@ import 'server-only'
 import { randomBytes } from 'node:crypto'
 import { and, eq, isNull } from 'drizzle-orm'
 import type { Db } from '@/db/client'
-import { type entry, entryLink, event, type person } from '@/db/schema'
+import { type entry, entryLink, event, person } from '@/db/schema'
 import { assert } from './assert'
 import { sha256 } from './sha256'
 
@@ -35,5 +35,15 @@ export function revokeEntryLinks(tx: Db, entryId: string, personId: string, now:
   tx.update(entryLink)
     .set({ revokedAt: now })
     .where(and(eq(entryLink.entryId, entryId), eq(entryLink.personId, personId), isNull(entryLink.revokedAt)))
+    .run()
+}
+
+/** To be called before a person's address is written: where it becomes another, links that went to the old one open nothing any more. */
+export function revokeLinksOfOldAddress(tx: Db, personId: string, email: string | null, now: number): void {
+  const before = tx.select({ email: person.email }).from(person).where(eq(person.id, personId)).get()
+  if (before === undefined || (before.email ?? '').trim().toLowerCase() === (email ?? '').trim().toLowerCase()) return
+  tx.update(entryLink)
+    .set({ revokedAt: now })
+    .where(and(eq(entryLink.personId, personId), isNull(entryLink.revokedAt)))
     .run()
 }

@@ -12,13 +12,13 @@ import { saveDeclarationDraft } from '@/lib/entrants/commands/save-declaration-d
 import { signDeclaration as sign } from '@/lib/entrants/commands/sign-declaration'
 import { declaringOf } from '@/lib/entrants/queries/declaring-of'
 import { describeEntryLink } from '@/lib/entrants/queries/find-entry-link'
-import { myCars, myKit } from '@/lib/entrants/queries/my-garage'
+import { myCars, myEntries, myKit } from '@/lib/entrants/queries/my-garage'
 import { preChecksOf } from '@/lib/entrants/queries/pre-checks-of'
 import { seeMyEntry } from '@/lib/entrants/queries/see-my-entry'
 import { handle } from '@/lib/http/server'
 import { resetAllowances } from '@/lib/http/rate'
 import { setClock } from '@/lib/platform/clock'
-import { revokeEntryLinks } from '@/lib/platform/make-entry-link'
+import { makeEntryLink, revokeEntryLinks, revokeLinksOfOldAddress } from '@/lib/platform/make-entry-link'
 import { isRefusal } from '@/lib/platform/refusal'
 import { startSession } from '@/lib/platform/session'
 import { daySnapshotOf } from '@/lib/sync/server/day-snapshot-of'
@@ -146,6 +146,28 @@ describe('the link from an entry', () => {
     const opened = await opens(own.link.token, other)
     expect((await sees(opened.cookie)).status).toBe(200)
     expect((await sees(other)).json.code).toBe('not-signed-in')
+  })
+
+  test('an address that is corrected takes the entry from whoever had it, and the link that went to the old one opens nothing', async () => {
+    const wrong = await ida()
+    revokeLinksOfOldAddress(fresh.database, own.person.id, 'ida.rook@right.example', at)
+    fresh.database.update(person).set({ email: 'ida.rook@right.example' }).where(eq(person.id, own.person.id)).run()
+
+    expect((await sees(wrong)).json.code).toBe('missing')
+    expect(myEntries(fresh.database, actorOf(fresh.database, 'ida.rook@example.org'))).toEqual([])
+    expect((await opens(own.link.token)).json.code).toBe('entry-link-over')
+    const right = makeEntryLink(fresh.database, own.row, own.person, at)
+    expect((await sees((await opens(right.token)).cookie)).status).toBe(200)
+  })
+
+  test('who is taken out of the entry has no way into it', async () => {
+    fresh.database.delete(entryPerson).where(eq(entryPerson.personId, own.person.id)).run()
+    expect((await opens(own.link.token)).json.code).toBe('entry-link-over')
+  })
+
+  test('the same address written otherwise takes nothing back', async () => {
+    revokeLinksOfOldAddress(fresh.database, own.person.id, ' IDA.ROOK@example.org', at)
+    expect((await opens(own.link.token)).status).toBe(200)
   })
 
   test('an entry without an address is no way in', async () => {

@@ -49,13 +49,12 @@ function endOther({ database }: Deps, actor: AccountActor): void {
 function accountFor(tx: Db, found: FoundLink, passwordHash: string, now: number): string | Refusal {
   const { person: sentTo } = found
   const email = sentTo.email?.trim().toLowerCase() ?? ''
-  const known = sentTo.accountId
-    ? tx.select().from(account).where(eq(account.id, sentTo.accountId)).get()
-    : tx
-        .select()
-        .from(account)
-        .where(and(eq(account.clubId, sentTo.clubId), eq(account.email, email)))
-        .get()
+  const isMeant = email === '' ? eq(account.id, sentTo.accountId ?? '') : eq(account.email, email)
+  const known = tx
+    .select()
+    .from(account)
+    .where(and(eq(account.clubId, sentTo.clubId), isMeant))
+    .get()
   if (known === undefined && email === '') return refuse('entry-link-no-address')
   if (known && mayMore(tx, known)) return refuse('entry-link-needs-password')
   const id = known?.id ?? newId()
@@ -88,5 +87,5 @@ function becomeEntrant(tx: Db, accountId: string, { person: sentTo }: FoundLink)
       .set({ roles: [...row.roles, 'entrant'] })
       .where(eq(account.id, accountId))
       .run()
-  if (sentTo.accountId === null) tx.update(person).set({ accountId }).where(eq(person.id, sentTo.id)).run()
+  if (sentTo.accountId !== accountId) tx.update(person).set({ accountId }).where(eq(person.id, sentTo.id)).run()
 }

@@ -1,7 +1,7 @@
 import 'server-only'
-import { eq } from 'drizzle-orm'
+import { and, eq } from 'drizzle-orm'
 import type { Db } from '@/db/client'
-import { car, entry, entryLink, event, person } from '@/db/schema'
+import { car, entry, entryLink, entryPerson, event, person } from '@/db/schema'
 import type { AccountActor } from '@/lib/platform/actor'
 import { sha256 } from '@/lib/platform/sha256'
 import { addressOf, isPersonOf } from './my-entry-row'
@@ -22,6 +22,8 @@ export function findEntryLink(database: Db, token: string, now: number): FoundLi
     .innerJoin(car, eq(car.id, entry.carId))
     .innerJoin(event, eq(event.id, entry.eventId))
     .innerJoin(person, eq(person.id, entryLink.personId))
+    // Who was taken out of the entry has no way into it any more.
+    .innerJoin(entryPerson, and(eq(entryPerson.entryId, entry.id), eq(entryPerson.personId, person.id)))
     .where(eq(entryLink.tokenHash, sha256(token)))
     .get()
   if (row === undefined || row.link.revokedAt !== null || row.link.expiresAt <= now) return null

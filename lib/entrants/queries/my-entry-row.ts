@@ -56,11 +56,12 @@ export function addressOf(database: Db, actor: AccountActor): string {
   return database.select({ email: account.email }).from(account).where(eq(account.id, actor.accountId)).get()?.email ?? ''
 }
 
-/** Whether a person of an event is this account: linked to it, or of its address while linked to nobody. */
+/** Whether a person of an event is this account: of its address; without an address, linked to it. An address that was corrected counts at once. */
 export function isPersonOf(
   row: { readonly accountId: string | null; readonly email: string | null },
   accountId: string,
   email: string,
 ): boolean {
-  return row.accountId === null ? email !== '' && row.email?.trim().toLowerCase() === email : row.accountId === accountId
+  const written = row.email?.trim().toLowerCase() ?? ''
+  return written === '' ? row.accountId === accountId : written === email
 }

@@ -25,8 +25,8 @@ export interface MyEntryLine {
 export function myEntries(database: Db, actor: AccountActor): readonly MyEntryLine[] {
   const email = addressOf(database, actor)
   const isMe = or(
-    eq(person.accountId, actor.accountId),
-    and(sql`${person.accountId} IS NULL`, sql`lower(trim(${person.email})) = ${email}`),
+    sql`lower(trim(${person.email})) = ${email}`,
+    and(eq(person.accountId, actor.accountId), sql`trim(coalesce(${person.email}, '')) = ''`),
   )
   const rows = database
     .selectDistinct({

@@ -9,6 +9,7 @@ import type { AccountActor, Command } from '@/lib/platform/command'
 import { newId } from '@/lib/platform/ids'
 import { announce } from '@/lib/platform/live'
 import { ownEvent } from '@/lib/platform/own-event'
+import { revokeLinksOfOldAddress } from '@/lib/platform/make-entry-link'
 import { isRefusal, refuse, type Refusal } from '@/lib/platform/refusal'
 import { writeAudit } from '@/lib/platform/write-audit'
 import { rolesAt } from '@/lib/platform/roles-at'
@@ -40,7 +41,7 @@ export function editEntry(append: AppendServerRecords, readDay: ReadDay): Comman
       const after = { ...edit, people: edit.people.map((one): SeatedPerson => ({ ...one, person: one.person ?? newId() })) }
       const records = held.hasRecords ? recordAll(append, tx, own.id, held, fields, after, actor, now) : 0
       if (isRefusal(records)) return records
-      writeRows(tx, held, fields, after)
+      writeRows(tx, held, fields, after, now)
       const detail = { entry: held.row.id, version: held.row.version + 1, fields, recorded: records > 0 }
       writeAudit(tx, { clubId: own.clubId, eventId: own.id, at: now, accountId: actor.accountId, action: EDITED, detail })
       return { version: held.row.version + 1, records, fields: [...fields] }
@@ -128,8 +129,8 @@ function recordAll(
   return isRefusal(made) ? made : made.length
 }
 
-function writeRows(tx: Db, { row, values, hasRecords }: EntryValues, fields: readonly EditField[], after: After): void {
-  writePeople(tx, row, values, after)
+function writeRows(tx: Db, { row, values, hasRecords }: EntryValues, fields: readonly EditField[], after: After, now: number): void {
+  writePeople(tx, row, values, after, now)
   tx.update(entry)
     .set({
       carId: fields.some((field) => ['model', 'colour', 'plate'].includes(field)) ? carFor(tx, row, after) : row.carId,
@@ -151,12 +152,14 @@ function writeRows(tx: Db, { row, values, hasRecords }: EntryValues, fields: rea
     .run()
 }
 
-function writePeople(tx: Db, { id: entryId, clubId, eventId }: EntryValues['row'], before: EntryEdit, after: After): void {
+function writePeople(tx: Db, { id: entryId, clubId, eventId }: EntryValues['row'], before: EntryEdit, after: After, now: number): void {
   const was = new Set(before.people.map(({ person: id }) => id))
   for (const { person: id, name, email, mobile } of after.people) {
     const contacts = { name, email: email || null, mobile: mobile || null }
-    if (was.has(id)) tx.update(person).set(contacts).where(eq(person.id, id)).run()
-    else
+    if (was.has(id)) {
+      revokeLinksOfOldAddress(tx, id, contacts.email, now)
+      tx.update(person).set(contacts).where(eq(person.id, id)).run()
+    } else
       tx.insert(person)
         .values({ id, clubId, eventId, accountId: null, ...contacts })
         .onConflictDoNothing()

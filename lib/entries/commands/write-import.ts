@@ -3,6 +3,7 @@ import { and, eq, inArray, sql } from 'drizzle-orm'
 import type { Db } from '@/db/client'
 import { car, entry, entryImport as importTable, entryPerson, event, person, runGroup } from '@/db/schema'
 import { assert } from '@/lib/platform/assert'
+import { revokeLinksOfOldAddress } from '@/lib/platform/make-entry-link'
 import { newId } from '@/lib/platform/ids'
 import { writeAudit } from '@/lib/platform/write-audit'
 import { foldWord, plateKey } from '../entry-row'
@@ -138,11 +139,13 @@ function changeEntry(writing: Writing, { entry: known, planned: one, people }: E
     })
     .where(eq(entry.id, known.id))
     .run()
-  for (const { id, name, email, mobile } of people.contacts)
+  for (const { id, name, email, mobile } of people.contacts) {
+    revokeLinksOfOldAddress(tx, id, email || null, writing.now)
     tx.update(person)
       .set({ name, email: email || null, mobile: mobile || null })
       .where(eq(person.id, id))
       .run()
+  }
   if (people.remove.length > 0)
     tx.delete(entryPerson)
       .where(and(eq(entryPerson.entryId, known.id), eq(entryPerson.role, 'driver'), inArray(entryPerson.personId, [...people.remove])))
