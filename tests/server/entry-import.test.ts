@@ -172,4 +172,4 @@ test('ten thousand rows are planned and written in one request, well under its l
   expect(imports(bytes)).toMatchObject({ committed: true, added: 10_000 })
   expect(await count(tables.entryPerson)).toBe(10_000)
   expect(looks(bytes)).toMatchObject({ unchanged: 10_000, added: 0 })
-})
+}, 60_000)
