@@ -60,7 +60,7 @@ const TYRES_REACHED = checks('tyres that fluid reached', 'tyres.inner-edge')
 const FIT: See = { what: 'every-station', words: 'fit: reach, belts and head clearance', whereFitted: true }
 const HELMET = stations('helmet and kit', 'helmet', 'kit')
 const PAPERS = stations('licence, indemnity and briefing', 'sign', 'licence', 'paper', 'briefing')
-const QUARANTINE = 'High voltage: quarantine it, 15 m or more from people, cars and buildings.'
+const QUARANTINE = 'If it has high voltage: quarantine it, 15 m or more from people, cars and buildings.'
 
 const PLAIN = {
   car: null,
@@ -113,7 +113,7 @@ export const HOLD_TABLE: readonly HoldRow[] = [
     id: 'kerb-strike',
     words: 'Kerb strike, landing',
     car: [WHEELS, SUSPENSION, checks('sump', 'engine.leaks'), EXHAUST, HIGH_VOLTAGE],
-    warning: 'A high-voltage battery under the floor: quarantine it until it has been looked at.',
+    warning: 'If it has high voltage under the floor: quarantine it until it has been looked at.',
   },
   {
     ...PLAIN,

@@ -92,7 +92,9 @@ function listBlock(block: Block, state: SubjectState, book: Book | null): Listed
   const named = block.onlyChiefLifts ? [CHIEF_ONLY] : [...stations].map((id) => book?.stations.get(id)?.title ?? id)
   const byEye = block.onlyChiefLifts ? [] : alsoLookFor(block, state, book)
   const seeAgain = byEye.length === 0 ? named : [...named, `by eye: ${byEye.join(', ')}`]
-  return { kind: block.kind, words, seeAgain, at: block.at, stickerRemoved: block.stickerRemoved }
+  const warning = block.kind === 'hold' ? (holdRow(block.reason, book)?.warning ?? null) : null
+  const line = { kind: block.kind, words, seeAgain, at: block.at, stickerRemoved: block.stickerRemoved }
+  return warning === null ? line : { ...line, warning }
 }
 
 /** What the reason of a hold asks to be looked at and this checklist has nothing for; empty for whatever is no hold. */

@@ -67,7 +67,7 @@ function ofCar({ entry, listed, scanned, list }: PitFound, device: PitDevice): r
   if (isBlocked(entry) || local.length > 0) {
     const lines = [
       ...local.map(({ words, at }) => `${words}${since(at, device.timeZone)}`),
-      ...entry.blocks.map((block) => blockLine(block, device.timeZone)),
+      ...entry.blocks.flatMap((block) => [blockLine(block, device.timeZone), ...(block.warning === undefined ? [] : [block.warning])]),
     ]
     const why = lines.length > 0 ? lines : [`The car reads ${entry.verdict}.`]
     return [{ code: 'blocked', why, todo: todoForBlocked(entry) }]

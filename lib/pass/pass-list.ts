@@ -44,6 +44,8 @@ export interface ListedBlock {
   readonly words: string
   /** What is to be seen again, by station title; `CHIEF_ONLY` alone where no look ends it. */
   readonly seeAgain: readonly string[]
+  /** What whoever stands at the car must do besides (quarantine); absent in the list of an older build. */
+  readonly warning?: string
   readonly at: number | null
   readonly stickerRemoved: boolean | null
 }

@@ -85,6 +85,25 @@ test('[F13] a recall is made with when and what; it waits, visible to all, and i
   await waitFor(() => expect(screen.queryByRole('region', { name: 'Held' })).toBeNull())
 })
 
+test('a recall comes with fluid dropped: recorded with it where who holds may recall, offered in the bay where who held could not', async () => {
+  const bay = await aBegunBay()
+  bay.open()
+  await bay.press('Hold 47')
+  await bay.press('Fluid dropped')
+  await waitFor(() => expect(recordsOf(bay, 'recall')).toHaveLength(1))
+  // The small checklist has no leak check: the recall shows what the hold shows.
+  expect(recordsOf(bay, 'recall')).toMatchObject([{ trigger: { when: 'session-over', session: 1 }, stations: ['brakes'] }])
+
+  const marshal = await another(bay, ['marshal'])
+  bay.paddock.time.now += 60_000
+  await one(marshal.day, { ...CONTACT, reason: 'fluid-dropped', stations: ['brakes'], subject: { car: bay.car } })
+  await marshal.day.drain()
+  await bay.phone.day.drain()
+  await bay.press('Recall it after session 1 of A, as belongs to it')
+  await waitFor(() => expect(recordsOf(bay, 'recall')).toHaveLength(2))
+  await waitFor(() => expect(screen.queryByRole('button', { name: /as belongs to it/ })).toBeNull())
+})
+
 test('[F13] a recall at a time blocks by this device’s clock at once, and the bay says who has to say so', async () => {
   const bay = await aBegunBay()
   await seesAll(bay.phone.day, bay.car)

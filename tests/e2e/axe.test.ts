@@ -41,13 +41,15 @@ test.each(THEMES)('axe finds nothing on the office’s pages in %s', async (them
       .first()
       .click()
     const entry = await lookAt(page, 'entry', theme, page.getByRole('heading', { name: 'What became of it' }))
+    await page.goto(`${seeded.server.origin}${at}/holds`)
+    const holds = await lookAt(page, 'holds', theme, page.getByText('Nothing is held'))
     await page.goto(`${seeded.server.origin}${at}/import`)
     const list = await lookAt(page, 'import', theme, page.getByText('No list chosen'))
     await page.getByLabel('Choose an entry list').setInputFiles(resolve(import.meta.dirname, '../fixtures/entries-messy.csv'))
     const asked = await lookAt(page, 'import, asked', theme, page.getByRole('heading', { name: /questions$/ }))
     await page.goto(`${seeded.server.origin}${at}/people`)
     const people = await lookAt(page, 'people', theme, page.getByRole('table'))
-    return [...signIn, ...board, ...entries, ...entry, ...list, ...asked, ...people]
+    return [...signIn, ...board, ...holds, ...entries, ...entry, ...list, ...asked, ...people]
   })
 
   expect(found).toEqual([])

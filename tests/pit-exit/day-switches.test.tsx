@@ -115,6 +115,7 @@ test('heavy contact holds the car and the helmet of who was in it, in one action
   await pit.press('Hold it')
   await pit.press('Heavy contact, barrier')
   expect(await screen.findByText('HOLD')).toBeInTheDocument()
+  expect(screen.getByText(/If it has high voltage: quarantine it, 15 m or more/)).toBeInTheDocument()
   expect(recordsOf(pit, `car:${pit.car}`, 'hold')).toMatchObject([{ reason: 'heavy-contact' }])
   expect(recordsOf(pit, `person:${pit.driver}`, 'hold')).toMatchObject([{ reason: 'heavy-contact', stations: ['helmet'] }])
 })

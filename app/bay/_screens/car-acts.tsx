@@ -2,13 +2,12 @@
 
 import { useState } from 'react'
 import { useDay } from '@/app/_crew/day-context'
-import { DaySwitchesPanel } from '@/app/_crew/day-switches-panel'
 import { HoldSheet } from '@/app/_crew/hold-sheet'
 import { Button } from '@/app/_ui/button'
-import { Sheet } from '@/app/_ui/sheet'
 import { can } from '@/lib/permissions/policy'
 import type { DayEntry } from '@/lib/sync/client/day-client'
 import { useDayStatus } from '@/lib/sync/client/use-day'
+import { DaySwitchesButton } from './day-switches-button'
 import { RecallSheet } from './recall-sheet'
 import type { WalkSubject } from '@/app/_walk/use-walk'
 
@@ -21,7 +20,7 @@ interface CarActsProps {
 /** What may be done besides looking: hold it or somebody in it, recall it, and for whoever may the switches of the whole day. */
 export function CarActs({ entry, subject }: CarActsProps) {
   const { unlocked } = useDayStatus(useDay())
-  const [open, setOpen] = useState<'hold' | 'recall' | 'event' | null>(null)
+  const [open, setOpen] = useState<'hold' | 'recall' | null>(null)
   const roles = unlocked?.roles ?? []
   const close = () => setOpen(null)
   return (
@@ -36,18 +35,9 @@ export function CarActs({ entry, subject }: CarActsProps) {
           {'car' in subject ? `Recall ${entry.number}` : 'Recall this person'}
         </Button>
       )}
-      {can(roles, 'record:day') && (
-        <Button look="secondary" onClick={() => setOpen('event')}>
-          Wet, sessions over
-        </Button>
-      )}
+      <DaySwitchesButton />
       {open === 'hold' && <HoldSheet entry={entry.id} onHeld={close} onClose={close} />}
       {open === 'recall' && <RecallSheet entry={entry} subject={subject} onClose={close} />}
-      {open === 'event' && (
-        <Sheet isOpen title="For the whole event" onClose={close}>
-          <DaySwitchesPanel />
-        </Sheet>
-      )}
     </section>
   )
 }

@@ -11,6 +11,7 @@ import { useDayEntries, useDayVersion } from '@/lib/sync/client/use-day'
 import { CarRow } from './car-row'
 import { entryOfScan } from './entry-of-scan'
 import { ScanToFind } from './scan-to-find'
+import { DaySwitchesButton } from './day-switches-button'
 import { entryOfCode, isUnfinished, searchCars } from './search-cars'
 
 /** Cars shown at most; nobody scrolls through more with a glove on. */
@@ -72,6 +73,7 @@ export function FindCar() {
         </ul>
       )}
       {found.length > MOST_SHOWN && <p className="text-muted">{found.length - MOST_SHOWN} more: type further.</p>}
+      <DaySwitchesButton />
       <HandOver />
     </main>
   )
