@@ -186,7 +186,7 @@ test('[P1 P6 F7] an offline pit exit says PASSED for the label; after a hold and
   await onBoth('what the hold names is seen again and a new pass issued', async () => {
     await page.goto(`${server.origin}/bay`)
     await findCar(page, A.number)
-    await page.getByText('See again:').waitFor()
+    await page.getByText('See again: Engine bay').waitFor()
     const { stops, records } = await walkOn(page, GOOD)
     made += records
     expect(stops.map(({ at }) => at)).toContain('rear-left/tyres.inner-edge')
