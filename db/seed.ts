@@ -27,6 +27,7 @@ const said = {
     { what: 'Board', path: `/events/${seeded.eventId}/board` },
     { what: 'Bay', path: '/bay' },
     { what: 'Pit exit', path: '/pit-exit' },
+    { what: 'Inbox', path: '/inbox' },
     { what: 'Entrant’s cars and entry', path: '/cars' },
   ],
 }

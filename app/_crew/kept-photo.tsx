@@ -15,5 +15,5 @@ interface KeptPhotoProps {
 export function KeptPhoto({ hash, words, onRemove }: KeptPhotoProps) {
   const src = useKeptPhoto(hash)
   const missing = src === undefined ? 'Looking …' : 'Not on this device'
-  return <PhotoThumb src={src ?? null} words={words} missing={missing} {...(onRemove ? { onRemove } : {})} />
+  return <PhotoThumb src={src ?? null} words={words} missing={missing} size="small" {...(onRemove ? { onRemove } : {})} />
 }

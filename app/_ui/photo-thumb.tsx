@@ -12,26 +12,42 @@ export interface PhotoThumbProps {
   readonly words: string
   /** Why there is no picture, where there is none. */
   readonly missing?: string
+  /** `small`: on a crew screen, where the answers need the room. */
+  readonly size?: 'small' | 'normal'
   /** Takes it away again; offered beside the large picture. */
   readonly onRemove?: () => void
   readonly className?: string
 }
 
 /** A small photograph; pressed, it is shown large. One that cannot be had says so in words. */
-export function PhotoThumb({ src, words, missing = 'Photograph not to be had here', onRemove, className }: PhotoThumbProps) {
+export function PhotoThumb({
+  src,
+  words,
+  missing = 'Photograph not to be had here',
+  size = 'normal',
+  onRemove,
+  className,
+}: PhotoThumbProps) {
   const [isOpen, setOpen] = useState(false)
   const [broken, setBroken] = useState<string | null>(null)
-  const size = classNames('size-24 shrink-0 overflow-hidden rounded-sm border-2 border-line bg-surface', className)
+  const box = classNames(
+    size === 'small' ? 'size-16' : 'size-24',
+    'shrink-0 overflow-hidden rounded-sm border-2 border-line bg-surface',
+    className,
+  )
   if (src === null || broken === src) {
     return (
-      <span data-slot="photo-thumb" className={classNames(size, 'grid place-items-center p-1 text-center text-sm text-muted')}>
+      <span
+        data-slot="photo-thumb"
+        className="inline-grid min-h-16 max-w-40 place-items-center rounded-sm border-2 border-dashed border-muted bg-surface px-2 text-center text-sm text-muted"
+      >
         {missing}
       </span>
     )
   }
   return (
     <>
-      <button data-slot="photo-thumb" type="button" className={size} aria-label={`Photograph: ${words}`} onClick={() => setOpen(true)}>
+      <button data-slot="photo-thumb" type="button" className={box} aria-label={`Photograph: ${words}`} onClick={() => setOpen(true)}>
         <Picture src={src} words="" className="size-full object-cover" onBroken={() => setBroken(src)} />
       </button>
       <Dialog

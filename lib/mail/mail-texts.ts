@@ -27,7 +27,7 @@ export function invitationText(event: MailEvent, entry: MailEntry, name: string,
     subject: `${event.name}: declare your car ${entry.number}`,
     text: mail([
       `Hello ${name},`,
-      `you are entered with number ${entry.number}, ${entry.model}, for ${event.name} at ${event.venue}, ${daysOf(event)}.`,
+      `you are entered with number ${entry.number}, ${entry.model}, for ${event.name} (${event.venue}, ${daysOf(event)}).`,
       `Open your entry here:\n${link}`,
       'Please declare your car, your belts and your kit there before you travel. Each answer is judged at once by the rules the bay uses, so that nothing surprises you on the day. Have the labels of your belts and your helmet at hand.',
       'The link is yours alone. Whoever has it can sign for you, so do not pass it on.',

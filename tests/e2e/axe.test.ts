@@ -49,7 +49,16 @@ test.each(THEMES)('axe finds nothing on the office’s pages in %s', async (them
     const asked = await lookAt(page, 'import, asked', theme, page.getByRole('heading', { name: /questions$/ }))
     await page.goto(`${seeded.server.origin}${at}/people`)
     const people = await lookAt(page, 'people', theme, page.getByRole('table'))
-    return [...signIn, ...board, ...holds, ...entries, ...entry, ...list, ...asked, ...people]
+    await page.goto(`${seeded.server.origin}${at}/mail`)
+    const mail = await lookAt(page, 'mail', theme, page.getByRole('heading', { name: 'Invitation' }))
+    await page.goto(`${seeded.server.origin}/inbox`)
+    const inbox = await lookAt(page, 'inbox', theme, page.getByRole('heading', { name: 'Inbox' }))
+    await page.goto(`${seeded.server.origin}${at}/order`)
+    const order = await lookAt(page, 'order', theme, page.getByRole('heading', { name: 'Call-up windows' }))
+    await page.goto(`${seeded.server.origin}${at}/wall`)
+    const wall = await lookAt(page, 'wall', theme, page.getByRole('heading', { name: /^Novice/ }))
+    const day = [...board, ...holds, ...order, ...wall]
+    return [...signIn, ...day, ...entries, ...entry, ...list, ...asked, ...people, ...mail, ...inbox]
   })
 
   expect(found).toEqual([])

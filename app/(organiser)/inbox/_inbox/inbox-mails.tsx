@@ -6,15 +6,15 @@ export function InboxMails({ mails, origin }: { readonly mails: readonly InboxMa
   return (
     <ul className="grid gap-3">
       {mails.map((mail) => (
-        <li key={mail.id} className="border-t pt-3">
+        <li key={mail.id} className="min-w-0 border-t pt-3">
           <details>
-            <summary className="target cursor-pointer">
+            <summary className="target cursor-pointer wrap-anywhere">
               <span className="font-bold">{mail.subject}</span>
               <span className="block text-muted">
                 to {mail.to}, {sentAt(mail.sentAt)}
               </span>
             </summary>
-            <p className="mt-3 border-l-4 pl-4 break-words whitespace-pre-wrap">
+            <p className="mt-3 border-l-4 pl-4 wrap-anywhere whitespace-pre-wrap">
               <WithLinks text={mail.text} origin={origin} />
             </p>
           </details>

@@ -1,9 +1,10 @@
 'use client'
 
-import { clockTime } from '@/app/_crew/say-when'
+import { clockTime, dayWords } from '@/app/_crew/say-when'
 import { Button } from '@/app/_ui/button'
 import { DataTable, Td, Th } from '@/app/_ui/data-table'
 import type { MailView } from '@/lib/contracts/mail'
+import { venueDay } from '@/lib/rules/venue-day'
 
 interface MailTableProps {
   readonly mails: readonly MailView[]
@@ -59,16 +60,15 @@ export function MailTable({ mails, timeZone, onAgain }: MailTableProps) {
 }
 
 function MailState({ mail, timeZone }: { readonly mail: MailView; readonly timeZone: string }) {
-  const at = (time: number) => clockTime(time, timeZone)
+  // Mail goes out over weeks: a time alone would say little.
+  const at = (time: number) => `${dayWords(venueDay(time, timeZone))}, ${clockTime(time, timeZone)}`
   const { state, sentAt, nextTryAt, tries, why } = mail
   if (state === 'sent') return <>sent {at(sentAt ?? 0)}</>
   if (why === null) return <>waits to be sent</>
   const times = tries === 1 ? 'once' : `${tries} times`
   return (
     <>
-      <span className="font-bold">
-        {state === 'given-up' ? `given up, tried ${times}` : `tried ${times}, again at ${at(nextTryAt ?? 0)}`}
-      </span>
+      <span className="font-bold">{state === 'given-up' ? `given up, tried ${times}` : `tried ${times}, again ${at(nextTryAt ?? 0)}`}</span>
       <span className="block">{why}</span>
     </>
   )
