@@ -9,18 +9,14 @@ export const MARRAM = {
   timeZone: 'Europe/London',
   days: 2,
   listStaleMinutes: 30,
-  checklist: 'checklists/closed-circuit/v2.json',
-  limits: 'checklists/limits/track-day.json',
+  checklist: 'closed-circuit/v2.json',
+  limits: 'limits/track-day.json',
   /** On the list it is the entrant's own. */
   entrantNumber: '303',
   entryList: 'tests/fixtures/entries-clean.csv',
   /** For the demo alone: everybody may read it here. */
   password: 'ottermere-ring-demo',
-  groups: [
-    { name: 'Novice', firstSession: '09:00' },
-    { name: 'Intermediate', firstSession: '09:20' },
-    { name: 'Advanced', firstSession: '09:40' },
-  ],
+  groups: ['Novice', 'Intermediate', 'Advanced'],
 } as const
 
 export interface DemoAccount {

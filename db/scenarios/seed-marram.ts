@@ -1,17 +1,15 @@
 import 'server-only'
 import { and, eq, max } from 'drizzle-orm'
-import { readFileSync } from 'node:fs'
-import { resolve } from 'node:path'
 import type { Db } from '@/db/client'
-import { account, checklistText, club, crewMember, event, limitsText, person, runGroup } from '@/db/schema'
+import { account, club, crewMember, event, person, runGroup } from '@/db/schema'
 import { transaction } from '@/db/transaction'
-import { checklistSchema, limitsSchema } from '@/lib/checklist/checklist'
+import { keepBooks } from '@/lib/events/commands/published-books'
+import { writeTimetable } from '@/lib/events/commands/save-timetable'
 import { newId } from '@/lib/platform/ids'
 import { hashPassword } from '@/lib/platform/password'
-import { sha256 } from '@/lib/platform/sha256'
 import { addDays, type CivilDate } from '@/lib/rules/civil-date'
 import { venueDay } from '@/lib/rules/venue-day'
-import { venueInstant } from '@/lib/rules/venue-instant'
+import { demoTimetable } from './demo-timetable'
 import { demoEmail, MARRAM, MARRAM_ACCOUNTS } from './marram'
 
 export interface SeededMarram {
@@ -81,8 +79,7 @@ function seedEvent(tx: Db, clubId: string, firstDay: CivilDate, lastDay: CivilDa
       timeZone: MARRAM.timeZone,
       firstDay,
       lastDay,
-      checklistHash: keepChecklist(tx),
-      limitsHash: keepLimits(tx),
+      ...keepBooks(tx, MARRAM.checklist, MARRAM.limits),
       defaultDepth: 'standard',
       depthPolicy: 'all',
       listStaleMinutes: MARRAM.listStaleMinutes,
@@ -92,33 +89,17 @@ function seedEvent(tx: Db, clubId: string, firstDay: CivilDate, lastDay: CivilDa
       createdAt: now,
     })
     .run()
-  MARRAM.groups.forEach(({ name, firstSession }, index) => {
-    const firstSessionAt = venueInstant(firstDay, firstSession, MARRAM.timeZone)
+  const groups = MARRAM.groups.map((name, index) => {
+    const id = newId()
     tx.insert(runGroup)
-      .values({ ...owner, id: newId(), name, order: index + 1, firstSessionAt })
+      .values({ ...owner, id, name, order: index + 1, firstSessionAt: null })
       .run()
+    return id
   })
+  const made = tx.select().from(event).where(eq(event.id, owner.eventId)).get()
+  if (!made) throw new Error('the demo has no event')
+  for (let day = firstDay; day <= lastDay; day = addDays(day, 1)) writeTimetable(tx, made, day, demoTimetable(groups))
   return owner.eventId
-}
-
-function keepChecklist(tx: Db): string {
-  const body = readFileSync(resolve(process.cwd(), MARRAM.checklist), 'utf8')
-  checklistSchema.parse(JSON.parse(body))
-  tx.insert(checklistText)
-    .values({ hash: sha256(body), body })
-    .onConflictDoNothing()
-    .run()
-  return sha256(body)
-}
-
-function keepLimits(tx: Db): string {
-  const body = readFileSync(resolve(process.cwd(), MARRAM.limits), 'utf8')
-  limitsSchema.parse(JSON.parse(body))
-  tx.insert(limitsText)
-    .values({ hash: sha256(body), body })
-    .onConflictDoNothing()
-    .run()
-  return sha256(body)
 }
 
 function seedCrew(tx: Db, clubId: string, eventId: string, accounts: ReadonlyMap<string, string>, now: number): void {

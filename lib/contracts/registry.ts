@@ -4,6 +4,7 @@ import type { Contract } from './contract'
 import { decideCrew, listCrew } from './crew'
 import { openEntryLink } from './entry-link'
 import { eventDeclarations } from './event-declarations'
+import { createEvent, saveTimetable } from './events'
 import { enrolDevice, listDevices, retireDevice } from './devices'
 import { editEntry } from './entry-edit'
 import { entryImport } from './entry-import'
@@ -39,6 +40,8 @@ export const CONTRACTS: readonly Contract[] = [
   syncPush,
   syncPull,
   live,
+  createEvent,
+  saveTimetable,
   board,
   seeBayOrder,
   planBay,

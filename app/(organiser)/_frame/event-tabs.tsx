@@ -1,11 +1,12 @@
 import Link from 'next/link'
 import { type Action, can, type Role } from '@/lib/permissions/policy'
 
-export type EventTab = 'board' | 'holds' | 'order' | 'entries' | 'import' | 'people' | 'devices' | 'mail'
+export type EventTab = 'board' | 'holds' | 'timetable' | 'order' | 'entries' | 'import' | 'people' | 'devices' | 'mail'
 
 const TABS: readonly { readonly tab: EventTab; readonly label: string; readonly action: Action }[] = [
   { tab: 'board', label: 'Board', action: 'board:see' },
   { tab: 'holds', label: 'Holds', action: 'holds:see' },
+  { tab: 'timetable', label: 'Timetable', action: 'event:see' },
   { tab: 'order', label: 'Bay order', action: 'order:see' },
   { tab: 'entries', label: 'Entries', action: 'entries:see' },
   { tab: 'import', label: 'Import', action: 'entries:import' },
