@@ -57,7 +57,11 @@ test.each(THEMES)('axe finds nothing on the office’s pages in %s', async (them
     const order = await lookAt(page, 'order', theme, page.getByRole('heading', { name: 'Call-up windows' }))
     await page.goto(`${seeded.server.origin}${at}/wall`)
     const wall = await lookAt(page, 'wall', theme, page.getByRole('heading', { name: /^Novice/ }))
-    const day = [...board, ...holds, ...order, ...wall]
+    await page.goto(`${seeded.server.origin}${at}/timetable`)
+    const timetable = await lookAt(page, 'timetable', theme, page.getByRole('button', { name: 'Save the day' }).first())
+    await page.goto(`${seeded.server.origin}/events/new`)
+    const fresh = await lookAt(page, 'new event', theme, page.getByRole('button', { name: 'Make the event' }))
+    const day = [...board, ...holds, ...order, ...wall, ...timetable, ...fresh]
     return [...signIn, ...day, ...entries, ...entry, ...list, ...asked, ...people, ...mail, ...inbox]
   })
 

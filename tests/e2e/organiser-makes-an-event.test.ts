@@ -1,0 +1,60 @@
+import type { Browser } from 'playwright-core'
+import { afterAll, beforeAll, expect, test } from 'vitest'
+import { launchBrowser } from '../support/browser'
+import { signInOn } from '../support/crew-device'
+import { type SeededServer, startSeededServer } from '../support/seeded-server'
+import { step, watchPage, type WatchedPage } from '../support/watch-page'
+
+let seeded: SeededServer
+let browser: Browser
+let office: WatchedPage
+
+beforeAll(async () => {
+  seeded = await startSeededServer('new-event')
+  browser = await launchBrowser()
+  office = watchPage(await (await browser.newContext({ viewport: { width: 1440, height: 900 } })).newPage(), 'office')
+})
+afterAll(async () => {
+  await browser.close()
+  await seeded.end(seeded.server)
+})
+
+test('an event is made from nothing, its timetable typed, copied to the second day, and a fault is said beside its line', async () => {
+  const { page } = office
+  const day = (name: string) => page.getByRole('form', { name: `Timetable of ${name}` })
+  await step('the event is made', [office], async () => {
+    await signInOn(page, seeded.server.origin, { email: 'organiser@marram.example', password: seeded.password }, '/events')
+    await page.getByRole('link', { name: 'New event' }).click()
+    await page.getByRole('button', { name: 'Make the event' }).click()
+    await page.getByText('a name such as “Marram in May”').waitFor()
+    await page.getByLabel('Name').fill('Marram in May')
+    await page.getByLabel('Venue').fill('Ottermere Ring')
+    await page.getByLabel('First day').fill('2027-05-08')
+    await page.getByLabel('Last day').fill('2027-05-09')
+    await page.getByRole('button', { name: 'Make the event' }).click()
+    await page.getByRole('heading', { level: 1, name: 'Marram in May' }).waitFor()
+  })
+  await step('the first day is typed', [office], async () => {
+    const saturday = day('Sat 8 May 2027')
+    for (let lines = 0; lines < 3; lines += 1) await saturday.getByRole('button', { name: 'Add a line' }).click()
+    await saturday.getByLabel('From').nth(2).fill('09:30')
+    await saturday.getByRole('button', { name: 'Save the day' }).click()
+    await saturday.getByText('It begins while the session of 09:20 runs.').waitFor()
+    await saturday.getByLabel('From').nth(2).fill('09:40')
+    await saturday.getByRole('button', { name: 'Save the day' }).click()
+    await saturday.getByText('Saved.', { exact: true }).waitFor()
+  })
+  await step('the second day is as the first', [office], async () => {
+    const sunday = day('Sun 9 May 2027')
+    await sunday.getByRole('button', { name: 'As on Sat 8 May 2027' }).click()
+    await sunday.getByRole('button', { name: 'Save the day' }).click()
+    await sunday.getByText('Saved.', { exact: true }).waitFor()
+    await page.reload()
+    expect(
+      await day('Sun 9 May 2027')
+        .getByLabel('From')
+        .evaluateAll((fields) => fields.map((field) => (field as HTMLInputElement).value)),
+    ).toEqual(['09:00', '09:20', '09:40'])
+  })
+  expect(office.complaints()).toEqual([])
+})
