@@ -8,7 +8,7 @@ import { Button } from '@/app/_ui/button'
 import { Notice } from '@/app/_ui/notice'
 import { saveTimetable, timetableBody, type TimetableBlockBody } from '@/lib/contracts/events'
 import type { Problem } from '@/lib/contracts/problem'
-import { inOrder } from '@/lib/events/timetable-of-day'
+import { inOrder, timetableProblems } from '@/lib/events/timetable-of-day'
 import { call } from '@/lib/http/call'
 import { LineEditor } from './line-editor'
 import { nextLine } from './next-line'
@@ -31,6 +31,9 @@ export function DayEditor({ eventId, day, groups, lines, others, onSaved }: DayE
   const { isSubmitting, isDirty } = form.formState
   const send = form.handleSubmit(async (body) => {
     setProblem(null)
+    const faults = timetableProblems(body.blocks, new Set(groups.map(({ id }) => id)))
+    for (const { line, field, words } of faults) form.setError(`blocks.${line}.${field}`, { message: words })
+    if (faults.length > 0) return
     const answer = await call(saveTimetable, { params: { event: eventId }, body })
     if (answer.ok) {
       onSaved(inOrder(body.blocks))
