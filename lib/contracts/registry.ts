@@ -17,6 +17,7 @@ import { getPhoto, putPhoto } from './photos'
 import { saveDraft, signDeclaration } from './my-declaration'
 import { myEntry } from './my-entry'
 import { addCar, addKit, keepCar, keepKit } from './my-garage'
+import { reportCsv, reportJson } from './report'
 import { signIn } from './sign-in'
 import { signOut } from './sign-out'
 import { syncPull } from './sync-pull'
@@ -41,6 +42,8 @@ export const CONTRACTS: readonly Contract[] = [
   syncPull,
   live,
   createEvent,
+  reportCsv,
+  reportJson,
   saveTimetable,
   board,
   seeBayOrder,

@@ -23,6 +23,7 @@ export const POLICY = {
   'board:see': ['admin', 'organiser', 'chief', 'scrutineer', 'helper', 'sign-on', 'marshal'],
   /** E-mails and mobiles of people in cars. */
   'contacts:see': ['admin', 'organiser'],
+  'report:see': ['admin', 'organiser', 'chief'],
   'order:see': ['admin', 'organiser', 'chief', 'scrutineer', 'helper', 'sign-on'],
   'order:plan': ['admin', 'organiser'],
   'crew:accept': ['admin', 'organiser'],

@@ -14,6 +14,7 @@ const MATRIX: Readonly<Record<Action, string>> = {
   'holds:see': '            yes   yes       yes   no         no     no      no      no',
   'board:see': '            yes   yes       yes   yes        yes    yes     yes     no',
   'contacts:see': '         yes   yes       no    no         no     no      no      no',
+  'report:see': '           yes   yes       yes   no         no     no      no      no',
   'order:see': '            yes   yes       yes   yes        yes    yes     no      no',
   'order:plan': '           yes   yes       no    no         no     no      no      no',
   'crew:accept': '          yes   yes       no    no         no     no      no      no',

@@ -119,6 +119,8 @@ const MAY: Readonly<Record<string, readonly Role[]>> = {
   'event-declarations': ['admin', 'organiser', 'chief'],
   holds: ['admin', 'organiser', 'chief'],
   'pass-void': ['organiser', 'chief'],
+  'report-csv': ['admin', 'organiser', 'chief'],
+  'report-json': ['admin', 'organiser', 'chief'],
   'event-create': ['admin', 'organiser'],
   'timetable-save': ['admin', 'organiser'],
   'see-bay-order': ['admin', 'organiser', 'chief', 'scrutineer', 'helper', 'sign-on'],

@@ -1,7 +1,7 @@
 import Link from 'next/link'
 import { type Action, can, type Role } from '@/lib/permissions/policy'
 
-export type EventTab = 'board' | 'holds' | 'timetable' | 'order' | 'entries' | 'import' | 'people' | 'devices' | 'mail'
+export type EventTab = 'board' | 'holds' | 'timetable' | 'order' | 'entries' | 'import' | 'people' | 'devices' | 'mail' | 'report'
 
 const TABS: readonly { readonly tab: EventTab; readonly label: string; readonly action: Action }[] = [
   { tab: 'board', label: 'Board', action: 'board:see' },
@@ -11,6 +11,7 @@ const TABS: readonly { readonly tab: EventTab; readonly label: string; readonly 
   { tab: 'entries', label: 'Entries', action: 'entries:see' },
   { tab: 'import', label: 'Import', action: 'entries:import' },
   { tab: 'mail', label: 'Mail', action: 'mail:see' },
+  { tab: 'report', label: 'Report', action: 'report:see' },
   { tab: 'people', label: 'People', action: 'crew:see' },
   { tab: 'devices', label: 'Devices', action: 'crew:see' },
 ]
