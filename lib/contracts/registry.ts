@@ -2,6 +2,7 @@ import { planBay, seeBayOrder } from './bay-order'
 import { board } from './board'
 import type { Contract } from './contract'
 import { decideCrew, listCrew } from './crew'
+import { choosePassword, inviteCrew } from './crew-invite'
 import { openEntryLink } from './entry-link'
 import { eventDeclarations } from './event-declarations'
 import { createEvent, saveTimetable } from './events'
@@ -35,6 +36,8 @@ export const CONTRACTS: readonly Contract[] = [
   joinState,
   listCrew,
   decideCrew,
+  inviteCrew,
+  choosePassword,
   enrolDevice,
   listDevices,
   retireDevice,

@@ -121,6 +121,7 @@ const MAY: Readonly<Record<string, readonly Role[]>> = {
   'pass-void': ['organiser', 'chief'],
   'report-csv': ['admin', 'organiser', 'chief'],
   'report-json': ['admin', 'organiser', 'chief'],
+  'crew-invite': ['admin', 'organiser'],
   'event-create': ['admin', 'organiser'],
   'timetable-save': ['admin', 'organiser'],
   'see-bay-order': ['admin', 'organiser', 'chief', 'scrutineer', 'helper', 'sign-on'],

@@ -6,6 +6,7 @@ import { Notice } from '@/app/_ui/notice'
 import type { CrewMemberView } from '@/lib/contracts/crew'
 import type { Problem } from '@/lib/contracts/problem'
 import { CrewTable } from './crew-table'
+import { InviteForm } from './invite-form'
 import { JoinCode } from './join-code'
 import { type Decision, useCrew } from './use-crew'
 import { WaitingList } from './waiting-list'
@@ -19,7 +20,7 @@ interface PeopleScreenProps {
 
 /** The event's crew: a code to join by, who waits, who is in. */
 export function PeopleScreen({ eventId, timeZone, mayInvite, mayDecide }: PeopleScreenProps) {
-  const { crew, problem, decide } = useCrew(eventId)
+  const { crew, problem, decide, renew } = useCrew(eventId)
   const [refused, setRefused] = useState<Problem | null>(null)
   const [said, setSaid] = useState('')
   const waiting = crew?.filter(({ state }) => state === 'waiting') ?? []
@@ -52,8 +53,9 @@ export function PeopleScreen({ eventId, timeZone, mayInvite, mayDecide }: People
         )}
       </div>
       {mayInvite && (
-        <div className="lg:col-start-2 lg:row-span-2 lg:row-start-1">
+        <div className="grid content-start gap-6 lg:col-start-2 lg:row-span-2 lg:row-start-1">
           <JoinCode eventId={eventId} />
+          {mayDecide && <InviteForm eventId={eventId} onInvited={renew} />}
         </div>
       )}
       {crew !== null && (

@@ -26,5 +26,5 @@ export function useCrew(eventId: string) {
     return decided.ok ? null : decided.problem
   }
 
-  return { crew: data?.crew ?? null, problem: error instanceof CallProblem ? error.problem : null, decide }
+  return { crew: data?.crew ?? null, problem: error instanceof CallProblem ? error.problem : null, decide, renew: () => void mutate() }
 }
