@@ -90,7 +90,7 @@ test('the chief follows the link of the mail, chooses a password and comes in wi
 
 /** The link that the invitation carries, as it lies in the outbox. */
 function passwordLink(): string {
-  const database = new Database(seeded.db, { readonly: true })
+  const database = new Database(seeded.server.db, { readonly: true })
   const row = database.prepare<[], { text: string }>("SELECT text FROM mail_outbox WHERE kind = 'crew-invitation'").get()
   database.close()
   const path = /\/password\/\S+/.exec(row?.text ?? '')?.[0]
