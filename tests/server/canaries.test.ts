@@ -1,16 +1,15 @@
-import { fileURLToPath } from 'node:url'
 import { afterEach, beforeEach, describe, expect, test } from 'vitest'
 import * as tables from '@/db/schema'
 import type { Contract } from '@/lib/contracts/contract'
 import { CONTRACTS } from '@/lib/contracts/registry'
 import { resetAllowances } from '@/lib/http/rate'
-import type { RouteHandler } from '@/lib/http/server'
 import { CREW_ROLES, type CrewRole, type Role, ROLES } from '@/lib/permissions/policy'
 import { newId } from '@/lib/platform/ids'
 import { startSession } from '@/lib/platform/session'
 import { aClubWithCanaries, type CanaryEvent } from '../support/a-club-with-canaries'
 import { ORIGIN } from '../support/ask'
 import { freshDatabase } from '../support/fresh-database'
+import { handlerOf } from '../support/handler-of'
 
 // Whoever asks, whatever route: what belongs to another club, and for crew to another event, is never in the answer. Each row of the
 // database carries a word that says whose it is; the words are looked for in the bytes that were sent.
@@ -33,16 +32,6 @@ const reading = CONTRACTS.filter(({ method, auth }) => method === 'GET' && (auth
 const writing = CONTRACTS.filter(({ method, auth }) => method !== 'GET' && (auth === 'session' || auth === 'either'))
 /** Written by hand: whose address and telephone may be in an answer. */
 const SEES_CONTACTS: readonly Role[] = ['admin', 'organiser']
-
-async function handlerOf({ path, method }: Contract): Promise<RouteHandler> {
-  const file = fileURLToPath(new URL(`../../app${path}/route.ts`, import.meta.url))
-    .replaceAll('%5B', '[')
-    .replaceAll('%5D', ']')
-  const route = (await import(/* @vite-ignore */ file)) as Record<string, RouteHandler | undefined>
-  const handler = route[method]
-  if (!handler) throw new Error(`no ${method} in app${path}/route.ts`)
-  return handler
-}
 
 /** The answer's own bytes, with every part of the path filled in with what is really there. */
 async function sent(contract: Contract, of: CanaryEvent, cookie: string, body?: unknown): Promise<{ status: number; text: string }> {

@@ -1,15 +1,14 @@
-import { fileURLToPath } from 'node:url'
 import { afterEach, beforeEach, describe, expect, test } from 'vitest'
 import type { Contract } from '@/lib/contracts/contract'
 import { problem } from '@/lib/contracts/problem'
 import { CONTRACTS } from '@/lib/contracts/registry'
 import { resetAllowances } from '@/lib/http/rate'
-import type { RouteHandler } from '@/lib/http/server'
 import { CREW_ROLES, type CrewRole, type Role, ROLES } from '@/lib/permissions/policy'
 import { startSession } from '@/lib/platform/session'
 import { aClub, noSuchId } from '../support/a-club'
 import { ask, type Asked } from '../support/ask'
 import { freshDatabase } from '../support/fresh-database'
+import { handlerOf } from '../support/handler-of'
 
 // Every route there is, found by the registry: a new one is asked the same hostile questions without a line here.
 let fresh: ReturnType<typeof freshDatabase>
@@ -26,16 +25,6 @@ afterEach(() => fresh.close())
 const every = CONTRACTS.map((contract) => ({ name: contract.name, contract }))
 const unsafe = every.filter(({ contract }) => contract.method !== 'GET')
 const forSignIns = every.filter(({ contract }) => contract.auth === 'session')
-
-async function handlerOf({ path, method }: Contract): Promise<RouteHandler> {
-  const file = fileURLToPath(new URL(`../../app${path}/route.ts`, import.meta.url))
-    .replaceAll('%5B', '[')
-    .replaceAll('%5D', ']')
-  const route = (await import(/* @vite-ignore */ file)) as Record<string, RouteHandler | undefined>
-  const handler = route[method]
-  if (!handler) throw new Error(`no ${method} in app${path}/route.ts`)
-  return handler
-}
 
 /** As Next does: undefined for a path without a variable part. */
 function paramsOf({ path }: Contract, eventId: string): Record<string, string> | undefined {
